@@ -1,0 +1,1 @@
+"""What follows from a deal: compiled once, evaluated over a trial axis."""

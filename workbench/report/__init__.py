@@ -1,0 +1,1 @@
+"""Documents: first a plain Document, then the PDF."""

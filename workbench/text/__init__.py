@@ -1,0 +1,1 @@
+"""Numbers, dates and messages in words."""
