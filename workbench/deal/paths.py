@@ -1,0 +1,128 @@
+"""Key paths: `section.field`, `section.field.YEAR`, `list@id.field`.
+
+A list item is named by its list and its id wherever it is nested: `leases@e3.start`. The value of a
+year row may be named whole (`earn.vacancy`) or year by year (`earn.vacancy.3`).
+"""
+
+from collections.abc import Mapping
+from dataclasses import fields, is_dataclass, replace
+from typing import Any, TypeAlias
+
+from workbench.deal.inputs import Field, declared
+
+Step: TypeAlias = str | int
+
+
+class UnknownPathError(LookupError):
+    """No input of the deal has this path."""
+
+    def __init__(self, path: str, part: str) -> None:
+        super().__init__(f"{path}: the deal has no “{part}”")
+        self.path = path
+        self.part = part
+
+
+def locate(deal: Any, path: str) -> tuple[Step, ...]:
+    """The steps from the deal down to what the path names: fields by name, items by position.
+
+    The last step of a year path is the year as an integer. Raises UnknownPathError.
+    """
+    head, *rest = path.split(".")
+    steps: tuple[Step, ...] = ()
+    record = deal
+    if "@" in head:
+        steps = find_item(deal, head)
+        record = value_at(deal, steps)
+    elif head:
+        rest = [head, *rest]
+    for position, part in enumerate(rest):
+        if not is_dataclass(record) or part not in declared(type(record)):
+            year = _year(record, part)
+            if year is None or position != len(rest) - 1:
+                raise UnknownPathError(path, part)
+            return (*steps, year)
+        steps = (*steps, part)
+        record = _row_or_value(record, part)
+    return steps
+
+
+def _row_or_value(record: Any, name: str) -> Any:
+    value = getattr(record, name)
+    if value is None and declared(type(record))[name].is_row:
+        return {}
+    return value
+
+
+def _year(row: Any, part: str) -> int | None:
+    if isinstance(row, Mapping) and part.isascii() and part.isdigit() and int(part) > 0:
+        return int(part)
+    return None
+
+
+def find_item(deal: Any, name: str) -> tuple[Step, ...]:
+    """The steps to the item `list@id`. Raises UnknownPathError."""
+    list_name, _, identity = name.partition("@")
+    found = _search(deal, list_name, identity)
+    if found is None:
+        raise UnknownPathError(name, name)
+    return found
+
+
+def _search(record: Any, list_name: str, identity: str) -> tuple[Step, ...] | None:
+    for spec in fields(record):
+        value = getattr(record, spec.name)
+        if not isinstance(value, tuple):
+            continue
+        for position, item in enumerate(value):
+            if not is_dataclass(item):
+                break
+            here: tuple[Step, ...] = (spec.name, position)
+            if spec.name == list_name and getattr(item, "id", None) == identity:
+                return here
+            below = _search(item, list_name, identity)
+            if below is not None:
+                return here + below
+    return None
+
+
+def value_at(record: Any, steps: tuple[Step, ...]) -> Any:
+    """What the steps lead to; None for a year that is not typed."""
+    for step in steps:
+        if isinstance(record, tuple):
+            record = record[int(step)]
+        elif isinstance(record, Mapping):
+            record = record.get(step)
+        elif record is not None:
+            record = getattr(record, str(step))
+    return record
+
+
+def get(deal: Any, path: str) -> Any:
+    """The value a path names. Raises UnknownPathError."""
+    return value_at(deal, locate(deal, path))
+
+
+def put(record: Any, steps: tuple[Step, ...], value: Any) -> Any:
+    """A copy of the record with the value in that place; None takes a year out of its row."""
+    if not steps:
+        return value
+    first, rest = steps[0], steps[1:]
+    if isinstance(record, tuple):
+        position = int(first)
+        inner = put(record[position], rest, value)
+        return (*record[:position], inner, *record[position + 1 :])
+    if isinstance(record, Mapping) or record is None:
+        row = {key: held for key, held in (record or {}).items() if key != first}
+        if value is not None:
+            row[first] = value
+        return dict(sorted(row.items()))
+    return replace(record, **{str(first): put(getattr(record, str(first)), rest, value)})
+
+
+def field_of(deal: Any, path: str) -> Field:
+    """The declaration of the input that a path names. Raises UnknownPathError."""
+    steps = locate(deal, path)
+    if isinstance(steps[-1], int):
+        steps = steps[:-1]
+    owner = value_at(deal, steps[:-1])
+    return declared(type(owner))[str(steps[-1])]
