@@ -1,0 +1,1 @@
+"""A slow, independent reckoning of the figures, to hold the engine against."""

@@ -48,7 +48,7 @@ def _check_lease(space: Space, lease: Lease) -> Iterator[Issue]:
         return
     if lease.end < lease.start:
         yield Issue(f"{path}.end", "before_start", lease.end, other={"start": lease.start})
-    if lease.break_date is not None and not lease.start <= lease.break_date <= lease.end:
+    if lease.break_date is not None and not lease.start <= lease.break_date < lease.end:
         yield Issue(
             f"{path}.break_date",
             "outside_lease",

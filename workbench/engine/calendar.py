@@ -1,0 +1,48 @@
+"""Deal months on the calendar, and dates as positions along them.
+
+Month m runs from closing plus m calendar months to the day before closing plus m+1; a day past a
+month's end clips to its last day. A position is a month index plus the share of that month's days
+that has passed, so that a day in mid-month divides the month pro rata by days.
+"""
+
+import datetime
+from bisect import bisect_right
+from calendar import monthrange
+from functools import lru_cache
+
+from workbench.deal.inputs import YEARS
+
+MONTHS = 12 * YEARS
+
+
+def add_months(day: datetime.date, months: int) -> datetime.date:
+    """The same day so many months later, clipped to the month's last day.
+
+    >>> add_months(datetime.date(2027, 1, 31), 1)
+    datetime.date(2027, 2, 28)
+    """
+    year, month = divmod(day.year * 12 + day.month - 1 + months, 12)
+    return datetime.date(year, month + 1, min(day.day, monthrange(year, month + 1)[1]))
+
+
+@lru_cache(maxsize=16)
+def month_starts(closing: datetime.date) -> list[int]:
+    """First day of each deal month 0…492, as ordinals; the last one ends the horizon."""
+    return [add_months(closing, month).toordinal() for month in range(MONTHS + 1)]
+
+
+def position(starts: list[int], day: datetime.date) -> float:
+    """Where a day begins along the deal months, held between 0 and the horizon (492).
+
+    >>> starts = month_starts(datetime.date(2027, 1, 1))
+    >>> position(starts, datetime.date(2027, 2, 15))
+    1.5
+    """
+    ordinal = day.toordinal()
+    if ordinal <= starts[0]:
+        return 0.0
+    if ordinal >= starts[-1]:
+        return float(MONTHS)
+    month = bisect_right(starts, ordinal) - 1
+    first, following = starts[month], starts[month + 1]
+    return month + (ordinal - first) / (following - first)

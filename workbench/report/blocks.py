@@ -1,0 +1,62 @@
+"""Every kind of block, cut into slabs for a column of some width."""
+
+from dataclasses import replace
+
+from workbench.charts.shapes import moved
+from workbench.report import sheet
+from workbench.report.document import (
+    Block,
+    Figure,
+    KeyFigures,
+    Paragraph,
+    Section,
+    SideBySide,
+    Table,
+)
+from workbench.report.slabs import Slab, heading_slabs, piled, stack_height, text_slabs
+from workbench.report.tables import key_figure_slabs, table_slabs
+
+
+def section_slabs(section: Section, room: float, tallest: float) -> tuple[Slab, ...]:
+    """A section with its heading; `tallest` is what fits a page."""
+    slabs = list(heading_slabs(section.title, room)) if section.title else []
+    slabs += column_slabs(section.blocks, room, tallest)
+    slabs[0] = replace(slabs[0], space=sheet.SECTION_SPACE)
+    if section.together:
+        slabs[:-1] = [replace(slab, keep_next=True) for slab in slabs[:-1]]
+    return tuple(slabs)
+
+
+def column_slabs(blocks: tuple[Block, ...], room: float, tallest: float) -> tuple[Slab, ...]:
+    """Blocks one under the other."""
+    slabs: list[Slab] = []
+    for place, block in enumerate(blocks):
+        first, *others = _block_slabs(block, room, tallest)
+        above = sheet.PARAGRAPH_SPACE if isinstance(block, Paragraph) else sheet.BLOCK_SPACE
+        slabs += [replace(first, space=above if place else 0.0), *others]
+    return tuple(slabs)
+
+
+def _block_slabs(block: Block, room: float, tallest: float) -> tuple[Slab, ...]:
+    if isinstance(block, Paragraph):
+        return text_slabs(block.runs, sheet.LOOKS[block.look], room)
+    if isinstance(block, KeyFigures):
+        return key_figure_slabs(block, room)
+    if isinstance(block, Table):
+        return table_slabs(block, room)
+    if isinstance(block, Figure):
+        shapes = tuple(moved(shape, 0, 0) for shape in block.picture.shapes)
+        return (Slab(block.picture.height, shapes),)
+    return _side_by_side(block, room, tallest)
+
+
+def _side_by_side(block: SideBySide, room: float, tallest: float) -> tuple[Slab, ...]:
+    """Two columns as one slab, or one after the other where they are higher than a page."""
+    left_room, right_room = sheet.columns(room, block.share)
+    left = column_slabs(block.left, left_room, tallest)
+    right = column_slabs(block.right, right_room, tallest)
+    high = max(stack_height(left), stack_height(right))
+    if high > tallest:
+        return column_slabs((*block.left, *block.right), room, tallest)
+    beside = piled(right, left_room + sheet.COLUMN_GAP)
+    return (Slab(high, (*piled(left), *beside)),)

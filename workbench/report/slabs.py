@@ -1,0 +1,68 @@
+"""Slabs: the pieces that pages are built of and that never break themselves."""
+
+from dataclasses import dataclass, replace
+
+from workbench.charts.lettering import CAP_HEIGHT, printable
+from workbench.charts.shapes import Line, Role, Shape, Text, moved
+from workbench.charts.wrapping import Run, TextLine, length, wrap_runs
+from workbench.report import sheet
+
+
+@dataclass(frozen=True)
+class Slab:
+    """Shapes from a top left corner of their own, so high, with space above unless first."""
+
+    height: float
+    shapes: tuple[Shape, ...] = ()
+    space: float = 0.0
+    keep_next: bool = False
+    """Whether the next slab must stand on the same page."""
+    header: tuple["Slab", ...] = ()
+    """What is repeated above it where it begins a page."""
+
+
+def stack_height(slabs: tuple[Slab, ...]) -> float:
+    """How high slabs are one above the other."""
+    return sum(slab.height + (slab.space if place else 0.0) for place, slab in enumerate(slabs))
+
+
+def piled(slabs: tuple[Slab, ...], right: float = 0.0, down: float = 0.0) -> tuple[Shape, ...]:
+    """The shapes of slabs one above the other."""
+    shapes: list[Shape] = []
+    for place, slab in enumerate(slabs):
+        down += slab.space if place else 0.0
+        shapes += [moved(shape, right, down) for shape in slab.shapes]
+        down += slab.height
+    return tuple(shapes)
+
+
+def line_slab(line: TextLine, size: float, colour: Role = "ink") -> Slab:
+    """One line of runs."""
+    tall = sheet.line_height(size)
+    baseline = (tall + CAP_HEIGHT * size) / 2
+    shapes: list[Shape] = []
+    right = 0.0
+    for run in line:
+        shapes.append(Text(right, baseline, run.text, size, "start", run.weight, colour))
+        right += length((run,), size)
+    return Slab(tall, tuple(shapes))
+
+
+def text_slabs(
+    runs: tuple[Run, ...], size: float, room: float, colour: Role = "ink"
+) -> tuple[Slab, ...]:
+    """The lines of a text; neither its first nor its last line stands alone on a page."""
+    shown = tuple(replace(run, text=printable(run.text)) for run in runs)
+    lines = [line_slab(line, size, colour) for line in wrap_runs(shown, size, room)]
+    last = len(lines) - 1
+    return tuple(
+        replace(line, keep_next=place < last and (place == 0 or place == last - 1))
+        for place, line in enumerate(lines)
+    )
+
+
+def heading_slabs(title: str, room: float) -> tuple[Slab, ...]:
+    """A heading over a thin rule; it never stands last on a page."""
+    lines = text_slabs((Run(title, "bold"),), sheet.HEADING, room)
+    rule = Slab(5.0, (Line(0, 1.5, room, 1.5, "rule", 0.75),))
+    return tuple(replace(slab, keep_next=True) for slab in (*lines, rule))

@@ -1,0 +1,87 @@
+"""How the memo puts figures: one reader's marks, one currency, the same words everywhere."""
+
+from dataclasses import dataclass
+from datetime import MAXYEAR
+
+from workbench.deal.deal import Deal
+from workbench.report.cautions import NOT_STATED
+from workbench.text import numbers
+from workbench.text.locale import Locale
+from workbench.text.years import year_span
+
+_LONGEST_AMOUNT = 15
+"""Characters of an amount in a text or table; a longer one is shortened."""
+_SHORT_AMOUNT = 11
+_AREA_UNITS = {"m2": "m²", "sqft": "sq ft"}
+
+
+@dataclass(frozen=True)
+class Voice:
+    """Figures of one deal in the words of one locale."""
+
+    deal: Deal
+    locale: Locale
+
+    def money(self, value: float | None, characters: int = _LONGEST_AMOUNT) -> str:
+        return numbers.compact(value, self.locale, characters)
+
+    def short_money(self, value: float | None) -> str:
+        return self.money(value, _SHORT_AMOUNT)
+
+    def priced(self, value: float | None) -> str:
+        text = self.money(value)
+        currency = self.deal.conventions.currency
+        return text if text == numbers.MISSING else f"{currency}\u00a0{text}"
+
+    def share(self, value: float | None) -> str:
+        return numbers.percent(value, self.locale)
+
+    def rate(self, value: float | None) -> str:
+        return numbers.rate(value, self.locale)
+
+    def ratio(self, value: float | None) -> str:
+        return numbers.number(value, self.locale, 2)
+
+    def points(self, value: float) -> str:
+        return f"{numbers.number(100 * value, self.locale, 1)} percentage points"
+
+    def years(self, count: int | None) -> str:
+        if count is None:
+            return NOT_STATED
+        return "1 year" if count == 1 else f"{numbers.number(count, self.locale)} years"
+
+    def sale_date(self, hold: int | None) -> str:
+        """`the end of year 10 (31 March 2036)`, with the date where there is a closing date."""
+        if hold is None:
+            return "the end of the hold"
+        closing = self.deal.purchase.closing_date
+        if closing is None or closing.year + hold > MAXYEAR:
+            return f"the end of year {hold}"
+        last = year_span(closing, hold)[1]
+        return f"the end of year {hold} ({numbers.day(last, self.locale)})"
+
+    def required_return(self) -> str:
+        """The required return as words: one rate, or the lowest and highest of the years."""
+        hold = self.deal.leave.hold or 1
+        row = self.deal.returns.required
+        used = [rate for year, rate in row.items() if year <= hold]
+        if not used:
+            return f"— ({NOT_STATED})"
+        low, high = min(used), max(used)
+        words = self.rate(low) if low == high else f"{self.rate(low)} to {self.rate(high)} by year"
+        extra = self.deal.returns.extra_on_exit
+        return f"{words} ({self.rate(extra)} more on the sale)" if extra else words
+
+    def size(self) -> str:
+        """Units and area of the rent roll, as far as they are known."""
+        spaces = self.deal.spaces
+        units = sum(space.count or 0 for space in spaces)
+        parts: list[str] = []
+        if units:
+            count = numbers.number(units, self.locale)
+            parts.append("1 unit" if units == 1 else f"{count} units")
+        if spaces and all(space.area is not None for space in spaces):
+            area = sum((space.area or 0.0) * (space.count or 0) for space in spaces)
+            unit = _AREA_UNITS[self.deal.conventions.area_unit]
+            parts.append(numbers.area(area, self.locale, unit))
+        return ", ".join(parts)
