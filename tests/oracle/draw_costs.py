@@ -61,7 +61,7 @@ def random_spend(random: Random, spaces: list[dict[str, Any]], rent: float) -> d
     if some(random, 0.4):
         spend["reserves_growth"] = random_row(random, 0.0, 0.04)
     spend["reserves_place"] = random.choice(["below", "above"])
-    spend["reserves_use"] = random.choice(["spent", "account"])
+    spend["reserves_use"] = random.choice(["spent", "account", "account"])
     if some(random, 0.4):
         spend["reserves_opening"] = money(rent * random.uniform(0.01, 0.3))
     return spend

@@ -8,11 +8,11 @@ from tests.oracle.draw_rows import Ids, money, random_row, rate, some
 METHODS = {
     "forward_noi": 4,
     "trailing_noi": 4,
-    "perpetuity": 6,
-    "price_per": 5,
-    "rent_multiple": 3,
-    "purchase_price": 3,
-    "amount": 5,
+    "perpetuity": 9,
+    "price_per": 7,
+    "rent_multiple": 4,
+    "purchase_price": 5,
+    "amount": 7,
 }
 WEIGHTS = ([0.5, 0.5], [0.25, 0.75], [0.9, 0.1], [0.2, 0.3, 0.5], [0.25, 0.25, 0.5])
 
@@ -35,7 +35,7 @@ def random_price_terms(
     """Terms of the methods that grow a price of today or take one as typed."""
     units = sum(s["count"] for s in spaces)
     leave["price_per"] = money(rent * random.uniform(6, 20) / units)
-    if all("area" in s for s in spaces) and some(random, 0.5):
+    if all("area" in s for s in spaces) and some(random, 0.6):
         area = sum(s["count"] * s["area"] for s in spaces)
         leave["price_per"] = money(rent * random.uniform(6, 20) / area)
         leave["price_per_of"] = "area"

@@ -48,7 +48,7 @@ def random_lease(
     random: Random, ids: Ids, first: date, area: float | None, yearly: float
 ) -> dict[str, Any]:
     """A dated lease from a first day."""
-    top = random.choice([24, 24, 120, 120, 120, 500])
+    top = random.choice([24, 24, 120, 120, 500, 600])
     last = date.fromordinal(add_months(first.toordinal(), random.randint(1, top)) - 1)
     if some(random, 0.5):
         last += timedelta(days=random.randint(1, 40))

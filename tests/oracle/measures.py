@@ -37,7 +37,7 @@ def irr(flows: list[float]) -> float | None:
     for i in range(1, GRID + 1):
         high = LOWEST + step * i
         after = npv_at(flows, high)
-        if (before < 0) != (after < 0) and before != 0:
+        if (before < 0) != (after < 0):
             roots.append(bisect(flows, low, high))
         low, before = high, after
     signs = any(f > 0 for f in flows) and any(f < 0 for f in flows)

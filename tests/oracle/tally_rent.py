@@ -1,5 +1,6 @@
 """Names of the options that the rent roll of a deal uses."""
 
+from itertools import pairwise
 from typing import Any
 
 from tests.oracle.months import day_of, first_whole_month_after, month_starts
@@ -43,7 +44,7 @@ def gap_names(leases: list[dict[str, Any]], closing: int) -> set[str]:
     spans.sort()
     if spans and spans[0][0] > closing:
         names.add("lease:empty_at_closing")
-    for (_, last), (first, _) in zip(spans[:-1], spans[1:], strict=True):
+    for (_, last), (first, _) in pairwise(spans):
         if first > last + 1 and first > closing:
             names.add("lease:gap")
         elif first == last + 1:

@@ -51,7 +51,7 @@ def _check_lease(space: Space, lease: Lease) -> Iterator[Issue]:
     if lease.break_date is not None and not lease.start <= lease.break_date < lease.end:
         yield Issue(
             f"{path}.break_date",
-            "outside_lease",
+            "break_outside_lease",
             lease.break_date,
             other={"start": lease.start, "end": lease.end},
         )

@@ -18,6 +18,8 @@ PICTURES = 24
 
 
 def check_records(deal: Deal) -> Iterator[Issue]:
+    if not re.fullmatch("[A-Z]{3}", deal.conventions.currency):
+        yield Issue("conventions.currency", "bad_currency", deal.conventions.currency)
     yield from _check_ids(deal)
     yield from _check_references(deal)
     for statement in deal.statements:
@@ -47,18 +49,21 @@ def items(record: Any) -> Iterator[tuple[str, Any]]:
 
 
 def _check_ids(deal: Deal) -> Iterator[Issue]:
+    ahead = [item.id for _, item in items(deal) if int(item.id[1:]) >= deal.next_id]
+    for identity in ahead[:1]:
+        least = max(int(one[1:]) for one in ahead) + 1
+        yield Issue("next_id", "id_ahead", deal.next_id, least, None, {"id": identity})
+
+
+def misnamed(deal: Deal) -> Iterator[tuple[str, str]]:
+    """Items whose id could not be named in a key path, with what is wrong; none in a sound file."""
     seen: set[str] = set()
     for name, item in items(deal):
-        path = f"{name}@{item.id}"
-        match = re.fullmatch(r"([a-z])([1-9][0-9]{0,8})", item.id)
-        if match is None or match[1] != ID_LETTERS[name]:
-            yield Issue(path, "bad_id", item.id, other={"letter": ID_LETTERS[name]})
-        elif int(match[2]) >= deal.next_id:
-            yield Issue(
-                "next_id", "id_ahead", deal.next_id, int(match[2]) + 1, None, {"id": item.id}
-            )
-        if item.id in seen:
-            yield Issue(path, "same_id_twice", item.id)
+        letter = ID_LETTERS[name]
+        if re.fullmatch(rf"{letter}[1-9][0-9]{{0,8}}", item.id) is None:
+            yield f"{name}@{item.id}", f"an id here is the letter {letter} and a number from 1"
+        elif item.id in seen:
+            yield f"{name}@{item.id}", "this id stands twice; each item has its own"
         seen.add(item.id)
 
 

@@ -71,9 +71,11 @@ def find_item(deal: Any, name: str) -> tuple[Step, ...]:
 def _search(record: Any, list_name: str, identity: str) -> tuple[Step, ...] | None:
     for spec in fields(record):
         value = getattr(record, spec.name)
-        if not isinstance(value, tuple):
-            continue
-        for position, item in enumerate(value):
+        if is_dataclass(value):
+            inner = _search(value, list_name, identity)
+            if inner is not None:
+                return (spec.name, *inner)
+        for position, item in enumerate(value if isinstance(value, tuple) else ()):
             if not is_dataclass(item):
                 break
             here: tuple[Step, ...] = (spec.name, position)

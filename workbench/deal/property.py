@@ -8,6 +8,21 @@ from typing import Annotated, Literal, TypeAlias
 from workbench.deal.inputs import Input
 
 Timing: TypeAlias = Literal["month_end", "month_start", "year_end", "mid_year", "year_start"]
+LocaleCode: TypeAlias = Literal[
+    "en-US",
+    "en-GB",
+    "en-IN",
+    "de-DE",
+    "fr-FR",
+    "es-ES",
+    "it-IT",
+    "nl-NL",
+    "el-GR",
+    "pl-PL",
+    "sv-SE",
+    "pt-BR",
+    "ja-JP",
+]
 Series: TypeAlias = Literal["as_new", "same_buildings"]
 
 
@@ -38,7 +53,7 @@ class About:
 @dataclass(frozen=True)
 class Conventions:
     currency: Annotated[str, Input("Currency", "text", help="ISO 4217 code.")] = "USD"
-    locale: Annotated[str, Input("Locale of documents", "text")] = "en-US"
+    locale: Annotated[LocaleCode, Input("Locale of documents", "choice")] = "en-US"
     area_unit: Annotated[Literal["m2", "sqft"], Input("Unit of area", "choice")] = "m2"
     timing: Annotated[
         Timing,

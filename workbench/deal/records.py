@@ -16,7 +16,16 @@ class StatementLine:
         str, Input("Line", "reference", help="Key of a line, such as other_income or expense@x2.")
     ] = ""
     label: Annotated[str, Input("As the source calls it", "text", high=5000)] = ""
-    amount: Annotated[float | None, Input("Reported amount", "money", -1e15, 1e15)] = None
+    amount: Annotated[
+        float | None,
+        Input(
+            "Reported amount",
+            "money",
+            -1e15,
+            1e15,
+            help="Signed as it adds up: a cost is negative.",
+        ),
+    ] = None
     adjustment: Annotated[float, Input("Adjustment", "money", -1e15, 1e15)] = 0.0
     reason: Annotated[str, Input("Reason for the adjustment", "text", high=5000)] = ""
 

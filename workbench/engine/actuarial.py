@@ -6,6 +6,7 @@ import numpy as np
 import numpy.typing as npt
 
 Array = npt.NDArray[np.float64]
+LOWEST = -0.999999999  # of a rate per unit-period
 
 
 def apr(
@@ -35,7 +36,8 @@ def apr(
     -------
     float or None
         A fraction, such as 0.0969. None where no rate answers: nothing left of the advance after
-        payments at time 0, no later payment, a payment below 0, or a rate below −100 % per period.
+        payments at time 0, no later payment, a payment or time below 0, a number that is not
+        finite, or a loss of all but a billionth of the advance per unit-period.
 
     Raises
     ------
@@ -65,10 +67,10 @@ def apr(
 
 
 def _unit_rate(sizes: Array, when: Array) -> float | None:
-    """Rate per unit-period at which payments, given as logarithms of their parts, are worth 1.
+    """Rate per unit-period at which payments, given as logarithms of their sizes, are worth 1.
 
     The logarithm of their worth is convex and falls with the rate, so that Newton's method comes
-    down to the root from one side without a bracket.
+    to the root from one side without a bracket; the guard keeps a first step above −1.
     """
     whole = np.floor(when)
     part = when - whole
@@ -79,12 +81,8 @@ def _unit_rate(sizes: Array, when: Array) -> float | None:
         worth = np.exp(powers - largest)
         total = float(worth.sum())
         slope = float(worth @ (part / (1 + part * rate) + whole / (1 + rate))) / total
-        following = rate + (largest + math.log(total)) / slope
-        if following <= -1:
-            following = (rate - 1) / 2
-        if following <= -1:
-            return None
-        if abs(following - rate) <= 1e-15 * abs(following):
-            return following
-        rate = following
-    return rate
+        following = max(rate + (largest + math.log(total)) / slope, (rate - 1) / 2)
+        move, rate = abs(following - rate), following
+        if move <= 1e-10 * (0.01 + abs(rate)):  # the next step would be the square of this
+            break
+    return rate if rate > LOWEST else None

@@ -71,7 +71,7 @@ def irr(flows: npt.ArrayLike, times: npt.ArrayLike | None = None) -> Irr:
 
     Examples
     --------
-    >>> irr([-100.0, 10.0, 110.0])
+    >>> irr([-100.0, 110.0])
     Irr(status='unique', rate=0.1, roots=(0.1,), reason='')
     >>> [round(root, 9) for root in irr([-100.0, 230.0, -132.0]).roots]
     [0.1, 0.2]

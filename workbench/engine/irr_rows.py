@@ -11,7 +11,7 @@ Arrays here are turned: the shape is (flows, rows), so that a step in time is a 
 
 import numpy as np
 
-from workbench.engine.irr_worth import Array, range_ahead, scaled, worth
+from workbench.engine.irr_worth import Array, held, range_ahead, scaled, worth
 
 LOWEST = float(np.log(1e-12))  # continuous rate of −99.9999999999 % a year
 HIGHEST = float(np.log(1e300))
@@ -23,7 +23,7 @@ def even_step(times: Array) -> float | None:
     """The step in years of evenly spaced times, or None where they are not even."""
     step = float(times[-1] - times[0]) / (len(times) - 1)
     gap = np.abs(times - times[0] - step * np.arange(len(times)))
-    return step if float(gap.max()) <= 4 * np.spacing(times[-1] - times[0]) else None
+    return step if float(gap.max()) <= np.spacing(times[-1] - times[0]) else None
 
 
 def settle(flows: Array, times: Array, step: float | None, start: float | None = None) -> Array:
@@ -108,9 +108,9 @@ def _from_common(flows: Array, lead: Array, times: Array, rate: float) -> Array:
     early = weights[:, : len(lead)] @ lead
     # In the move u the logarithm is log(ratio) − length·u + spread·u²/2 − skew·u³/6.
     length, spread, skew = _cumulants(whole - early) - _cumulants(early)
-    move = np.log1p(-whole[0] / early[0]) / length
+    move: Array = np.log1p(-whole[0] / early[0]) / length
     bend = spread / (2 * length) * move
-    twist = 2 * bend**2 - skew / (6 * length) * move**2
+    twist: Array = 2 * bend**2 - skew / (6 * length) * move**2
     return rate + move * np.where(np.abs(bend) < 0.4, 1 + bend + twist, 1.0)
 
 

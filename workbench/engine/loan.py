@@ -141,7 +141,7 @@ def schedule(
         raise ValueError("a loan needs a term of at least one month")
     rate = np.broadcast_to(_monthly(rate_annual), (length,))
     share = _shares(rate, months, interest_only)
-    balance = principal * np.cumprod(1.0 - share)
+    balance = np.asarray(principal * np.cumprod(1.0 - share), dtype=np.float64)
     before = np.concatenate(([principal], balance[:-1]))
     interest, repaid = before * rate, before * share
     return Schedule(interest, repaid, interest + repaid, balance, float(balance[-1]))

@@ -28,7 +28,7 @@ from workbench.engine.roll import (
 )
 from workbench.engine.shape import Shape, shape_of
 
-_HARMLESS = frozenset({"too_long", "id_ahead", "draft"})
+_HARMLESS = frozenset({"too_long", "id_ahead", "draft", "path_lost", "bad_currency"})
 """Codes of issues that leave every figure as it is."""
 
 

@@ -143,6 +143,15 @@ class Result:
         cell = row[trial if len(row) > 1 else 0, 12 * year - 1]
         return float(cell) if math.isfinite(cell) else None
 
+    def given(self, path: str) -> float | None:
+        """An input as the lines read it; None where it is missing or out of range."""
+        cell = float(self.plan.inputs[path][0])
+        return cell if math.isfinite(cell) else None
+
+    def why_not_given(self, path: str) -> Reason:
+        """Why an input cannot be used."""
+        return Reason("waits_for", path, issue=self.plan.blocked.get(path))
+
     def reason(self, key: str, year: int | None = None, trial: int = 0) -> Reason:
         """Why a figure cannot be given, looked for from the line down to what it waits for."""
         found = next(self._reasons(key, None if year is None else year - 1, trial, set()), None)

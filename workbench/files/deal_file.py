@@ -8,6 +8,7 @@ from typing import Any, cast
 
 from pydantic import ValidationError
 
+from workbench.deal.checks_records import misnamed
 from workbench.deal.deal import Deal
 from workbench.files.adapter import deal_adapter
 from workbench.files.atomic import write_atomically
@@ -43,6 +44,9 @@ def deal_from_raw(raw: Raw) -> Deal:
         deal = deal_adapter().validate_json(json.dumps(current), strict=True)
     except ValidationError as error:
         raise UnreadableError(*(_fault(current, dict(one)) for one in error.errors())) from None
+    faults = [Fault(path, sentence) for path, sentence in misnamed(deal)]
+    if faults:
+        raise UnreadableError(*faults)
     return cast(Deal, deal)
 
 

@@ -34,7 +34,7 @@ def borrow_lines(shape: Shape) -> Iterator[Declared]:
         "debt_service",
         "Debt service",
         "scheduled interest and principal of all loans",
-        -total([Line(f"{part}@{one}") for one in ids for part in ("interest", "principal")]),
+        -total([Line(f"service@{one}") for one in ids]),
     )
     yield _sum(
         "loan_repayment",
@@ -87,3 +87,9 @@ def _loan(identity: str, amortises: bool, has_term: bool) -> Iterator[Declared]:
     for name, label, words in _OUTPUTS:
         body = Output("loan", name, arguments)
         yield Declared(f"{name}@{identity}", label, "money", "month", words, body)
+    yield _sum(
+        f"service@{identity}",
+        "Debt service",
+        "scheduled interest and principal",
+        Line(f"interest@{identity}") + Line(f"principal@{identity}"),
+    )

@@ -101,6 +101,13 @@ def _sources_and_uses(shape: Shape) -> Iterator[Declared]:
         Line("uses") - Line("loan_amount") - DEPOSITS,
     )
 
+    yield _once(
+        "sources",
+        "Sources of money at closing",
+        "loans, deposits taken over and cash to close",
+        Line("loan_amount") + DEPOSITS + Line("equity"),
+    )
+
 
 def _once(key: str, label: str, words: str, body: Formula) -> Declared:
     return Declared(key, label, "money", "once", words, body)

@@ -1,0 +1,95 @@
+"""The finished file, read back."""
+
+from dataclasses import replace
+from io import BytesIO
+from typing import Any
+
+import pytest
+from pypdf import PdfReader
+from pypdf.generic import DictionaryObject
+
+from tests.report.deals import DEAL, figures, pages_of
+from workbench.report.document import Document, Section, plain
+from workbench.report.memo import build
+from workbench.report.pdf import draw
+from workbench.text.locale import LOCALES
+
+PLAIN = Document("Memo", "Title", "", "Author", "", "Foot.", (Section("", (plain("Body."),)),))
+
+
+def embedded_fonts(reader: PdfReader) -> dict[str, Any]:
+    """Base fonts of all pages with the embedded font file of each, None where there is none."""
+    found: dict[str, Any] = {}
+    for page in reader.pages:
+        resources = page["/Resources"]
+        assert isinstance(resources, DictionaryObject)
+        fonts = resources["/Font"].get_object()
+        assert isinstance(fonts, DictionaryObject)
+        for reference in fonts.values():
+            font = reference.get_object()
+            descriptor = font.get("/FontDescriptor")
+            file = descriptor.get_object().get("/FontFile2") if descriptor else None
+            found[font["/BaseFont"]] = file
+    return found
+
+
+def test_only_the_shipped_font_is_used_embedded_and_subset() -> None:
+    pdf = draw(build(DEAL, figures(), LOCALES["en-GB"])).pdf
+    fonts = embedded_fonts(PdfReader(BytesIO(pdf)))
+    assert fonts
+    for name, file in fonts.items():
+        assert "Lato" in name
+        assert "+" in name, "a subset has a tag before its name"
+        assert file is not None
+    assert len(pdf) < 150_000, "three whole fonts would be two million bytes"
+
+
+def test_the_same_document_gives_the_same_bytes() -> None:
+    document = build(DEAL, figures(), LOCALES["en-GB"])
+    assert draw(document).pdf == draw(document).pdf
+
+
+def test_properties() -> None:
+    reader = PdfReader(BytesIO(draw(PLAIN).pdf))
+    assert reader.metadata is not None
+    assert reader.metadata.title == "Memo: Title"
+    assert reader.metadata.author == "Author"
+    assert reader.trailer["/Root"]["/Lang"] == "en"
+
+
+def test_properties_hold_no_control_characters_and_are_not_endless() -> None:
+    drawn = draw(replace(PLAIN, title="Ωμέγα\n<&>\x00\ud800" + "x" * 5000))
+    metadata = PdfReader(BytesIO(drawn.pdf)).metadata
+    assert metadata is not None
+    assert metadata.title is not None
+    assert metadata.title.startswith("Memo: Ωμέγα <&>xxx")
+    assert len(metadata.title) == 300
+
+
+@pytest.mark.parametrize(
+    "text",
+    [
+        "a < b & c > d",
+        "<b>not bold</b> &amp; <para>",
+        "Ωμέγα Ήλιος",
+        "Жуков Щёлково",
+        "100 % → −5 €",
+    ],
+)
+def test_any_text_is_printed_as_it_is(text: str) -> None:
+    document = replace(PLAIN, title=text, sections=(Section(text, (plain(text),)),))
+    (page,) = pages_of(draw(document).pdf)
+    assert page.count(text) == 3
+    assert draw(document).lacking == ()
+
+
+def test_five_thousand_characters_without_a_space() -> None:
+    document = replace(PLAIN, sections=(Section("", (plain("W" * 5000),)),))
+    assert sum(page.count("W") for page in pages_of(draw(document).pdf)) == 5000
+
+
+def test_characters_that_the_font_lacks_are_marked_and_listed() -> None:
+    document = replace(PLAIN, sections=(Section("", (plain("[日本] 🏠 日"),)),))
+    drawn = draw(document)
+    assert drawn.lacking == ("日", "本", "🏠")
+    assert "[□□] □ □" in pages_of(drawn.pdf)[0]

@@ -1,0 +1,47 @@
+"""The command line: reads the arguments and hands them to one command."""
+
+import argparse
+import importlib
+import os
+import sys
+from collections.abc import Sequence
+
+from workbench import __version__
+
+COMMANDS = ("figures", "document", "check")
+
+
+def parser() -> argparse.ArgumentParser:
+    """The whole command line; each command declares its own arguments."""
+    whole = argparse.ArgumentParser(
+        prog="groundcourse",
+        description="Underwriting of one income property: figures and documents from a deal file. "
+        "Arithmetic on your assumptions; not an appraisal and not investment advice.",
+    )
+    whole.add_argument("--version", action="version", version=f"groundcourse {__version__}")
+    commands = whole.add_subparsers(dest="command", required=True, metavar="COMMAND")
+    for name in COMMANDS:
+        module = importlib.import_module(f"workbench.commands.{name}")
+        one = commands.add_parser(name, help=module.SUMMARY, description=module.SUMMARY)
+        module.add_arguments(one)
+    return whole
+
+
+def main(words: Sequence[str] | None = None) -> int:
+    """Run one command; the exit status is 0 fine, 1 issues in the deal, 2 cannot be used."""
+    os.environ.setdefault("OPENBLAS_NUM_THREADS", "1")
+    arguments = parser().parse_args(words)
+    module = importlib.import_module(f"workbench.commands.{arguments.command}")
+    from workbench.commands.terms import say_fault
+    from workbench.files.faults import UnreadableError
+
+    try:
+        status = module.run(arguments)
+        sys.stdout.flush()
+        return int(status)
+    except (UnreadableError, OSError) as error:
+        return say_fault(arguments.deal, error)
+
+
+if __name__ == "__main__":
+    sys.exit(main())

@@ -1,0 +1,18 @@
+"""`groundcourse check`: what is wrong in a deal, if anything."""
+
+import argparse
+
+from workbench.commands.terms import FINE, add_deal, open_deal, say_issues
+
+SUMMARY = "say what is wrong in a deal, if anything"
+
+
+def add_arguments(parser: argparse.ArgumentParser) -> None:
+    add_deal(parser)
+
+
+def run(arguments: argparse.Namespace) -> int:
+    status = say_issues(open_deal(arguments))
+    if status == FINE:
+        print(f"{arguments.deal}: no issues found")
+    return status
