@@ -3,7 +3,7 @@
 from itertools import pairwise
 
 import pytest
-from hypothesis import given
+from hypothesis import given, settings
 from hypothesis import strategies as st
 
 from workbench.charts.gutter import Label, Span, lettered, spread
@@ -33,6 +33,7 @@ def test_no_labels() -> None:
     assert spread([], Span(0, 10)) == ()
 
 
+@settings(deadline=None)
 @given(st.lists(st.tuples(st.floats(-50, 250), st.floats(1, 18)), max_size=11))
 def test_never_overlapping_never_outside(wanted: list[tuple[float, float]]) -> None:
     ordered = sorted(wanted)

@@ -1,7 +1,7 @@
 """Widths of text and marks for what the font lacks."""
 
 import pytest
-from hypothesis import given
+from hypothesis import given, settings
 from hypothesis import strategies as st
 from reportlab.pdfbase import pdfmetrics, ttfonts
 
@@ -60,6 +60,7 @@ def test_what_is_lacking_is_listed_once_in_order() -> None:
     assert lacking("Only letters, Ωμέγα, Жуков — and 1,234 €.") == ()
 
 
+@settings(deadline=None)
 @given(st.text())
 def test_only_known_characters_are_printed(text: str) -> None:
     known = face("regular").widths
@@ -75,6 +76,7 @@ def test_shortening() -> None:
     assert shorten("anything", 10, 1) == "…"
 
 
+@settings(deadline=None)
 @given(st.text(max_size=80), st.floats(20, 200))
 def test_a_shortened_text_fits(text: str, room: float) -> None:
     assert width(shorten(text, 10, room, "bold"), 10, "bold") <= room

@@ -3,7 +3,7 @@
 from itertools import pairwise
 
 import pytest
-from hypothesis import given
+from hypothesis import given, settings
 from hypothesis import strategies as st
 
 from tests.charts.walls import (
@@ -147,6 +147,7 @@ def test_no_label_covers_another_or_is_cut(size: tuple[float, float], hold: int)
 amounts = st.one_of(st.just(0.0), st.floats(-1e12, 1e12), st.floats(-10, 10))
 
 
+@settings(deadline=None)
 @given(
     st.lists(st.tuples(amounts, amounts), max_size=40),
     st.one_of(st.none(), amounts),

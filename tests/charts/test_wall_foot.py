@@ -34,11 +34,13 @@ def test_notes() -> None:
     assert notes(wall_figures([(0.0, 5.0)], 1.0, has_leases=False)) == (
         "No leases entered: no rent is in hand.",
     )
-    assert notes(wall_figures([(0.0, 5.0)], None, exit_reason=" Because. ")) == (
+    assert notes(wall_figures([(0.0, 5.0)], 1.0)) == ("No dated lease runs: no rent is in hand.",)
+    assert notes(wall_figures([(1.0, 5.0)], None, exit_reason=" Because. ")) == (
         "No exit price. Because.",
     )
     assert notes(wall_figures([], None)) == ("No exit price.", "Nothing to stack yet.")
-    assert notes(wall_figures([(0.0, 0.0)], 0.0)) == (
+    assert notes(wall_figures([(0.0, 0.0)], 0.0, has_leases=False)) == (
+        "No leases entered: no rent is in hand.",
         "The value is not above zero, so there are no shares.",
         "Every amount is zero.",
     )

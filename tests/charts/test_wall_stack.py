@@ -1,7 +1,7 @@
 """What stands on what."""
 
 import pytest
-from hypothesis import given
+from hypothesis import given, settings
 from hypothesis import strategies as st
 
 from workbench.charts.wall_stack import WallCourse, WallFigures, stack_of
@@ -54,6 +54,7 @@ def test_nothing_and_a_missing_exit() -> None:
 amounts = st.floats(-1e9, 1e9)
 
 
+@settings(deadline=None)
 @given(st.lists(st.tuples(amounts, amounts), max_size=40), amounts)
 def test_the_top_is_always_the_value(rows: list[tuple[float, float]], leaving: float) -> None:
     value = sum(a + b for a, b in rows) + leaving

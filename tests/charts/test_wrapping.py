@@ -3,7 +3,7 @@
 from itertools import pairwise
 
 import pytest
-from hypothesis import given
+from hypothesis import given, settings
 from hypothesis import strategies as st
 
 from workbench.charts.lettering import width
@@ -60,6 +60,7 @@ def test_shortened_lines_say_that_there_is_more() -> None:
     assert wrap_short("one\ntwo", 10, 500, 1) == ("one two…",)
 
 
+@settings(deadline=None)
 @given(st.text(alphabet="ab W\n,", max_size=60), st.floats(15, 120))
 def test_no_line_is_too_long_and_no_letter_is_lost(text: str, room: float) -> None:
     lines = wrap(text, 10, room)

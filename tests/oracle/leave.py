@@ -13,7 +13,7 @@ from tests.oracle.months import (
     row_value,
     sum_years,
 )
-from tests.oracle.rent import Roll, market_index
+from tests.oracle.rent import Roll, net_growth
 
 
 def timing_of(raw: dict[str, Any]) -> str:
@@ -33,19 +33,17 @@ def value_at(raw: dict[str, Any], monthly: list[float], hold: int) -> float:
 def perpetuity(raw: dict[str, Any], roll: Roll, income: Income, hold: int) -> float | None:
     """Years to 41 month by month, then year 41 moved on at the last net growth, for ever."""
     net = flows_of(raw, income, account_allowed=False).net
-    index = market_index(raw)
-    growth = 0.0
-    if sum(roll.market[MONTHS - 12 :]) > 0:
-        growth = index[LAST_YEAR + 1] / index[LAST_YEAR] - 1
+    # From year 41 to 42, for ever after; rents of nought do not grow.
+    up = net_growth(raw, LAST_YEAR) if sum(roll.market[MONTHS - 12 :]) > 0 else 1.0
     rate = row_value(raw["returns"]["required"], LAST_YEAR + 1)
-    year_42 = [net[month] * (1 + growth) for month in range(MONTHS - 12, MONTHS)]
-    if rate <= growth or sum(year_42) <= 0:
+    year_42 = [net[month] * up for month in range(MONTHS - 12, MONTHS)]
+    if 1 + rate <= up or sum(year_42) <= 0:
         return None
     first = 0.0
     for i in range(12):
         first += year_42[i] * (1 + rate) ** (-flow_date(timing_of(raw), i) / 12)
-    # Each later year is worth (1+growth)/(1+rate) of the one before it.
-    after_41 = first / (1 - (1 + growth) / (1 + rate))
+    # Each later year is worth up/(1+rate) of the one before it.
+    after_41 = first / (1 - up / (1 + rate))
     table = discount_table(raw["returns"]["required"])
     return value_at(raw, net, hold) + after_41 * table[MONTHS] / table[12 * hold]
 

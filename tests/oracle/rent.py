@@ -5,12 +5,14 @@ from typing import Any
 
 from tests.oracle.months import (
     MONTHS,
+    Row,
     add_months,
     day_of,
     first_whole_month_after,
     growth_index,
     month_starts,
     nil,
+    row_value,
     year_of,
 )
 
@@ -59,11 +61,24 @@ def monthly_factor(rent: dict[str, Any], space: dict[str, Any]) -> float:
     return factor
 
 
-def market_index(raw: dict[str, Any]) -> list[float]:
-    """Index of market rent; same buildings are already net of age."""
+def wear_of(raw: dict[str, Any]) -> Row | None:
+    """Depreciation of rent; rents of the same buildings are already net of age."""
     earn = raw.get("earn", {})
-    as_new = earn.get("series", "as_new") == "as_new"
-    return growth_index(earn.get("growth"), earn.get("depreciation") if as_new else None)
+    if earn.get("series", "as_new") == "same_buildings":
+        return None
+    wear: Row | None = earn.get("depreciation")
+    return wear
+
+
+def market_index(raw: dict[str, Any]) -> list[float]:
+    """Index of market rent by year."""
+    return growth_index(raw.get("earn", {}).get("growth"), wear_of(raw))
+
+
+def net_growth(raw: dict[str, Any], year: int) -> float:
+    """Factor of market rent from a year to the next."""
+    growth = raw.get("earn", {}).get("growth")
+    return (1 + row_value(growth, year)) * (1 - row_value(wear_of(raw), year))
 
 
 def dated_lease(lease: dict[str, Any], space: dict[str, Any], closing: int) -> DatedLease:

@@ -104,7 +104,7 @@ def figures(
         },
         "irr": {"unlevered": 0.0912, "levered": 0.1134},
         "dscr": {"noi": [1.3, 1.25, 1.18, 1.2], "ncf": [1.2, 1.1, 1.05, None]},
-        "sources_uses": {"cash_to_close": 1_316_000.0},
+        "sources_uses": {"sources": {"equity": 1_316_000.0}},
         "reasons": {},
         "issues": [],
     }
@@ -127,7 +127,7 @@ def missing() -> dict[str, Any]:
         "irr": {"unlevered": None, "levered": None},
         "dscr": {"noi": [None], "ncf": []},
         "sources_uses": None,
-        "reasons": {"price": "The price is missing.", "value": "The hold is missing."},
+        "reasons": {"price": "the price is missing", "value": "the hold is missing"},
         "issues": None,
     }
 

@@ -8,7 +8,7 @@ from reportlab.pdfgen.canvas import Canvas
 
 from tests.report.deals import pages_of
 from workbench.charts.palette import PRINT
-from workbench.charts.shapes import Line, Picture, Polyline, Rect, Shape, Text
+from workbench.charts.shapes import Anchor, Line, Picture, Polyline, Rect, Shape, Text
 from workbench.report.painter import paint
 
 
@@ -67,17 +67,8 @@ def test_polylines_open_and_filled() -> None:
 @pytest.mark.parametrize(
     ("anchor", "first", "last"), [("start", 50, 62), ("middle", 44, 56), ("end", 38, 50)]
 )
-def test_text_hangs_on_its_anchor(anchor: str, first: int, last: int) -> None:
-    places = {"start": "start", "middle": "middle", "end": "end"}
-    image = dots(
-        Text(
-            50,
-            30,
-            "□",
-            20,
-            "start" if places[anchor] == "start" else "middle" if anchor == "middle" else "end",
-        )
-    )
+def test_text_hangs_on_its_anchor(anchor: Anchor, first: int, last: int) -> None:
+    image = dots(Text(50, 30, "□", 20, anchor))
     inked = [x / 2 for x in range(200) if any(image.getpixel((x, y))[0] < 99 for y in range(100))]
     assert first - 1 <= min(inked)
     assert max(inked) <= last + 1

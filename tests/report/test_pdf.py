@@ -54,7 +54,7 @@ def test_properties() -> None:
     assert reader.metadata is not None
     assert reader.metadata.title == "Memo: Title"
     assert reader.metadata.author == "Author"
-    assert reader.trailer["/Root"]["/Lang"] == "en"
+    assert str(reader.root_object["/Lang"]) == "en"
 
 
 def test_properties_hold_no_control_characters_and_are_not_endless() -> None:

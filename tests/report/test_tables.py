@@ -60,11 +60,8 @@ def test_cells_may_be_cut_after_some_lines() -> None:
 
 def test_key_figures_have_their_values_at_the_right_edge_on_the_label_s_line() -> None:
     item = KeyFigure("Value", "USD 3,807,784", "worth on these assumptions", strong=True)
-    label, value, note = sorted(
-        texts(key_figure_slabs(KeyFigures((item,)), 240)),
-        key=lambda t: t.y + (t.anchor == "end") * 0.1,
-    )
-    assert (label.text, value.text, note.text) == ("Value", item.value, item.note)
+    found = {text.text: text for text in texts(key_figure_slabs(KeyFigures((item,)), 240))}
+    label, value, note = (found[text] for text in (item.label, item.value, item.note))
     assert (value.x, value.anchor) == (240, "end")
     assert label.y == value.y < note.y
 
@@ -72,9 +69,7 @@ def test_key_figures_have_their_values_at_the_right_edge_on_the_label_s_line() -
 def test_a_long_value_is_set_smaller_and_never_cut() -> None:
     value = "USD 123,456,789,012,345,678,901"
     (slab,) = key_figure_slabs(KeyFigures((KeyFigure("Value", value),)), 240)
-    shown = next(
-        shape for shape in slab.shapes if isinstance(shape, Text) and shape.anchor == "end"
-    )
+    (shown,) = (s for s in slab.shapes if isinstance(s, Text) and s.anchor == "end")
     assert shown.text == value
     assert width(value, shown.size, "bold") <= 0.66 * 240 + 1e-6
 

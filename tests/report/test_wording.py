@@ -38,7 +38,7 @@ def test_a_value_not_above_zero_has_no_shares() -> None:
     text = led(figures(((20.0, -180.0),), 100.0))
     assert "would be worth less than nothing: USD\u00a0−60" in text
     assert text.endswith("The value is not above zero, so no shares of it are given.")
-    assert "would be worth nothing" in led(figures(((0.0, 0.0),), 0.0))
+    assert "the property would be worth nothing, " in led(figures(((0.0, 0.0),), 0.0))
 
 
 def test_a_value_whose_share_is_missing_for_another_reason() -> None:
@@ -61,7 +61,7 @@ def test_what_it_rests_on() -> None:
     tiers, beside, ground, sale = rested(figures())
     assert tiers == (
         "Brought back to today, rent already under contract comes to 1,081,927 and rent only "
-        "expected to 688,869, each after its share of the costs; the sale at the end of year 10 "
+        "expected to 688,869, after its share of the costs; the sale at the end of year 10 "
         "(March 31, 2036) comes to 2,036,988, after selling costs."
     )
     assert beside.startswith(
@@ -73,6 +73,12 @@ def test_what_it_rests_on() -> None:
         "The sale is taken at 4,481,374 at the end of year 10 (March 31, 2036): an income of "
         "291,289 at a yield of 6.5%. After selling costs, and with what is left in reserve, "
         "4,379,524."
+    )
+
+
+def test_no_rent_under_contract() -> None:
+    assert rested(figures(((0.0, 50.0),), 100.0))[0].startswith(
+        "No rent is under contract. Brought back to today, rent only expected comes to 50, after"
     )
 
 
@@ -91,13 +97,13 @@ def test_a_sale_without_a_price_and_tiers_without_an_exit() -> None:
     found = figures(
         exit=None,
         tiers={"in_hand": 5.0, "expected": 6.0, "exit": None},
-        reasons={"exit": "The exit yield is missing."},
+        reasons={"exit": "the exit yield is missing"},
         exit_value_share=None,
         ground_share=None,
     )
     assert rested(found) == [
         "Brought back to today, rent already under contract comes to 5 and rent only expected to "
-        "6, each after its share of the costs.",
+        "6, after its share of the costs.",
         "The sale has no price. The exit yield is missing.",
     ]
 

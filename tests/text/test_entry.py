@@ -1,7 +1,7 @@
 """What is typed where a number is wanted."""
 
 import pytest
-from hypothesis import given
+from hypothesis import given, settings
 from hypothesis import strategies as st
 
 from workbench.text.entry import NotTaken, Taken, parse_number
@@ -128,6 +128,7 @@ def test_a_value_beside_text_at_the_deepest_nesting() -> None:
     assert parse_number("(" * 49 + "1" + ")" * 49, US) == Taken(1.0)
 
 
+@settings(deadline=None)
 @given(st.text(alphabet="0123456789.,()+-*/%kmbnte −×", max_size=30))
 def test_no_entry_raises(text: str) -> None:
     for code in ("en-US", "fr-FR"):
@@ -135,6 +136,7 @@ def test_no_entry_raises(text: str) -> None:
         assert isinstance(read, Taken | NotTaken)
 
 
+@settings(deadline=None)
 @given(st.text(max_size=120))
 def test_no_text_raises(text: str) -> None:
     assert isinstance(parse_number(text, DE, percent=True), Taken | NotTaken)

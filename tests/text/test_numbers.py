@@ -4,7 +4,7 @@ from datetime import date
 from math import inf, nan
 
 import pytest
-from hypothesis import given
+from hypothesis import given, settings
 from hypothesis import strategies as st
 
 from workbench.text import numbers
@@ -135,6 +135,7 @@ def test_dates_have_their_month_in_words() -> None:
     assert numbers.day(first, DE, short=True) == "4 Mar 2026"
 
 
+@settings(deadline=None)
 @given(st.floats(-1e14, 1e14), st.sampled_from(sorted(LOCALES)))
 def test_what_is_shown_reads_back(value: float, code: str) -> None:
     locale = LOCALES[code]
@@ -143,6 +144,7 @@ def test_what_is_shown_reads_back(value: float, code: str) -> None:
     assert abs(read.value - value) <= 0.005 + abs(value) * 1e-15
 
 
+@settings(deadline=None)
 @given(st.floats(allow_nan=False, allow_infinity=False))
 def test_any_float_can_be_shown(value: float) -> None:
     assert numbers.number(value, US)

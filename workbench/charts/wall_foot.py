@@ -26,6 +26,8 @@ def notes_of(figures: WallFigures, stack: Stack) -> tuple[str, ...]:
     notes: list[str] = []
     if not figures.has_leases:
         notes.append("No leases entered: no rent is in hand.")
+    elif figures.courses and not any(course.in_hand for course in figures.courses):
+        notes.append("No dated lease runs: no rent is in hand.")
     if figures.exit is None:
         reason = figures.exit_reason.strip().rstrip(".")
         notes.append(f"No exit price. {reason}." if reason else "No exit price.")

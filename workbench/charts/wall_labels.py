@@ -9,7 +9,7 @@ from workbench.charts.wall_frame import OVERHANG, Frame, exit_lines, mark_labels
 from workbench.charts.wall_stack import Course, Stack, WallFigures
 
 _MANY_YEARS = 15
-_SPARE_LINES = 4
+_SPARE_LINES = 1
 """By how many lines the labels of the courses may spread beyond the courses themselves."""
 
 

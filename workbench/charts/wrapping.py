@@ -31,17 +31,20 @@ def wrap_runs(runs: tuple[Run, ...], size: float, room: float) -> tuple[TextLine
     """Lines no wider than the room; breaks at spaces, or inside a word that alone is too long."""
     lines: list[TextLine] = []
     line: tuple[Run, ...] = ()
+    filled = 0.0
     for word in _words(runs):
+        added = 0.0 if word is None else length((*word.gap, *word.parts), size)
+        if word is None or (line and filled + added > room):
+            lines.append(_joined(line))
+            line, filled = (), 0.0
         if word is None:
-            lines.append(_joined(line))
-            line = ()
             continue
-        if line and length((*line, *word.gap, *word.parts), size) > room:
-            lines.append(_joined(line))
-            line = ()
-        *whole, rest = _pieces(word.parts, size, room)
+        if line:
+            line, filled = (*line, *word.gap, *word.parts), filled + added
+            continue
+        *whole, line = _pieces(word.parts, size, room)
         lines += whole
-        line = (*line, *word.gap, *rest) if line else rest
+        filled = length(line, size)
     return (*lines, _joined(line))
 
 

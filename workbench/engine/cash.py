@@ -122,7 +122,9 @@ class Worth:
             return 0.0
         if self.log() > LARGEST:
             return math.copysign(math.inf, self.total)
-        return math.ldexp(self.total * math.exp(self.shift), self.twos)
+        if self.shift:
+            return math.copysign(math.exp(self.log()), self.total)
+        return math.ldexp(self.total, self.twos)
 
 
 def _worth(rate: float, money: Array, when: Array) -> Worth | None:

@@ -61,7 +61,8 @@ def irr(flows: npt.ArrayLike, times: npt.ArrayLike | None = None) -> Irr:
         other rate; or the search for all roots finds a single one, be it one that only touches
         zero. *several*: the search finds more, all of them in ``roots``.
 
-        The search covers every rate from −99.9999999999 % to 1e300 a year.
+        The search covers every rate from −99.9999999999 % to 1e300 a year, in full and not by
+        samples. It leaves out flows smaller than 1e-300 of the largest.
 
     Notes
     -----

@@ -20,7 +20,6 @@ from workbench.engine.irr_worth import Array
 EPS = float(np.finfo(np.float64).eps)
 TOUCH = 12 * EPS  # of the log ratio; half of it is |NPV| ÷ Σ|PV|
 NOTHING = 1e-300  # of the largest coefficient: left out
-HALVINGS = 200
 
 
 @dataclass(frozen=True, eq=False)
@@ -126,9 +125,13 @@ def log_ratio(rung: Terms, rate: float) -> tuple[float, float]:
 
 
 def _bracketed(rung: Terms, low: float, high: float, falling: bool) -> float:
-    """The root between two rates of opposite sign: Newton steps, or halving where they fail."""
+    """The root between two rates of opposite sign: Newton steps, or halving where they fail.
+
+    Every Newton step is less than half the move before it, and everything else halves the bracket,
+    so the moves run out of digits.
+    """
     rate, last = (0.0 if low < 0 < high else 0.5 * (low + high)), high - low
-    for _ in range(HALVINGS):
+    while True:
         value, slope = log_ratio(rung, rate)
         if (value > 0) == falling:
             low = rate
@@ -139,6 +142,5 @@ def _bracketed(rung: Terms, low: float, high: float, falling: bool) -> float:
         if not (low < following < high and abs(move) < 0.5 * last):
             following = 0.5 * (low + high)
         if abs(value) <= EPS or following in (low, high, rate):
-            break
+            return rate
         last, rate = abs(following - rate), following
-    return rate

@@ -54,6 +54,12 @@ LOOKS: Mapping[str, Callable[[Floats], Floats]] = {
 }
 
 
+def wide(figure: Floats | float, count: int) -> Floats:
+    """A single figure in each cell of a row of so many; of none, as one axis of trials."""
+    cells = np.atleast_1d(np.asarray(figure, dtype=np.float64))
+    return np.broadcast_to(cells, (count, len(cells))) if count else cells
+
+
 def _like(first: Floats | float, row: Floats) -> Floats:
     """A single figure as the row's first cell."""
     cell = np.asarray(first, dtype=np.float64).reshape(1, -1)

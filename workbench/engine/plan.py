@@ -28,7 +28,18 @@ from workbench.engine.roll import (
 )
 from workbench.engine.shape import Shape, shape_of
 
-_HARMLESS = frozenset({"too_long", "id_ahead", "draft", "path_lost", "bad_currency"})
+HARMLESS = frozenset(
+    {
+        "too_long",
+        "id_ahead",
+        "draft",
+        "path_lost",
+        "bad_currency",
+        "outside_lease",
+        "longer_than_term",
+        "longer_than_amortisation",
+    }
+)
 """Codes of issues that leave every figure as it is."""
 
 
@@ -55,7 +66,7 @@ def compile_deal(deal: Deal) -> Plan:
     shape = shape_of(deal)
     made = program(shape)
     issues = tuple(check(deal))
-    wrong = {path: one for path, one in faulty(issues).items() if one.code not in _HARMLESS}
+    wrong = {path: one for path, one in faulty(issues).items() if one.code not in HARMLESS}
     blocked = dict(_blocked_facts(deal, wrong))
     facts = _facts(deal, blocked)
     inputs = {path: _given(deal, path, wrong, blocked) for path in made.givens}

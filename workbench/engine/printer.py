@@ -17,8 +17,9 @@ from workbench.engine.calendar import MONTHS
 from workbench.engine.kernels import KERNELS
 from workbench.engine.lines import Declared, Output, declare
 from workbench.engine.lines.line import Per
-from workbench.engine.looks import LOOKS, at_year, before, first_date, on_date, on_dates
+from workbench.engine.looks import LOOKS, at_year, before, first_date, on_date, on_dates, wide
 from workbench.engine.roll import Floats
+from workbench.engine.rows import RowError, row_of
 from workbench.engine.shape import Shape
 
 Run: TypeAlias = Callable[[Mapping[str, Floats], Mapping[str, Floats]], dict[str, Floats]]
@@ -100,6 +101,7 @@ class _Writer:
     statements: list[str] = field(default_factory=list)
     names: dict[f.Formula, str] = field(default_factory=dict)
     kernels: dict[tuple[str, tuple[f.Formula, ...]], str] = field(default_factory=dict)
+    rows: dict[str, Per] = field(default_factory=dict)
 
     def function(self, order: list[Declared], givens: Iterable[str], facts: Iterable[str]) -> str:
         for path in givens:
@@ -116,20 +118,24 @@ class _Writer:
         if isinstance(line.body, Output):
             name = f"{self._kernel(line.body)}[{line.body.name!r}]"
         else:
-            name = self._rows(line.body, line.per)
+            name = self._body(line.body, line.per)
         held = []
         for position, (condition, _) in enumerate(line.unless):
             met = self._name(condition)
             held.append(f"    {condition_key(line.key, position)!r}: {met},")
             name = f"where({met}, nan, {name})"
         self.names[f.Line(line.key)] = self._assign(name)
+        self.rows[line.key] = line.per
         return [*held, f"    {line.key!r}: {self.names[f.Line(line.key)]},"]
 
-    def _rows(self, body: f.Formula, per: Per) -> str:
-        if isinstance(body, f.Number):
-            shape = "(1,)" if per == "once" else f"({ROWS[per]}, 1)"
-            return f"full({shape}, {body.value!r})"
-        return self._name(body)
+    def _body(self, body: f.Formula, per: Per) -> str:
+        """A body as a row of its line: a single figure stands in each cell."""
+        row = row_of(body, self.rows)
+        if row not in (per, "once"):
+            raise RowError(f"a line by {per} has a formula by {row}")
+        if row == per and not isinstance(body, f.Number):
+            return self._name(body)
+        return f"wide({self._name(body)}, {ROWS[per]})"
 
     def _kernel(self, body: Output) -> str:
         call = (body.kernel, body.arguments)
@@ -184,7 +190,7 @@ _NODES: Mapping[type[f.Formula], Callable[..., Floats]] = {
 def _load(source: str) -> Run:
     names: dict[str, object] = {
         "where": np.where,
-        "full": np.full,
+        "wide": wide,
         "nan": np.nan,
         "minimum": np.minimum,
         "maximum": np.maximum,

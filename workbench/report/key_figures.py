@@ -1,8 +1,9 @@
 """The memo's figures: those to be seen first, the tiers, and the table of measures."""
 
-from workbench.report.document import Column, KeyFigure, Table
+from workbench.report.document import Column, KeyFigure, SideBySide, Table
 from workbench.report.readings import Readings
 from workbench.report.voice import Voice
+from workbench.text.numbers import day
 
 _NOT_MARKET = "not market value"
 
@@ -34,7 +35,7 @@ def key_figures(read: Readings, voice: Voice) -> tuple[KeyFigure, ...]:
     ]
     if voice.deal.loans:
         chosen.append(_dscr(read, voice))
-    cash = voice.priced(read.number("sources_uses.cash_to_close"))
+    cash = voice.priced(read.number("sources_uses.sources.equity"))
     note = "own money needed at closing" if voice.deal.loans else "no loan is assumed"
     return (*chosen, KeyFigure("Cash to close", cash, note))
 
@@ -94,29 +95,31 @@ def tier_table(read: Readings, voice: Voice) -> Table:
     )
 
 
-def measures(read: Readings, voice: Voice) -> Table:
-    """What stands behind the first page, each figure with its basis."""
-    sale = voice.sale_date(read.hold)
-    rows = [
-        ("Required return", voice.required_return(), "a year, before debt and tax"),
-        ("Hold", voice.years(read.hold), f"to {sale}"),
-        ("Exit price", voice.money(read.number("exit.price")), f"at {sale}"),
-        ("Exit yield", voice.rate(read.number("exit.yield")), "of that price"),
-        ("Exit income", voice.money(read.number("exit.income")), "a year, as capitalised"),
-        ("Net exit", voice.money(read.number("exit.net")), "after selling costs"),
-        (
-            "Exit-value share",
-            voice.share(read.number("exit_value_share")),
-            exit_share_note(read, voice),
-        ),
-        ("IRR, unlevered", voice.rate(read.number("irr.unlevered")), "before debt and tax"),
+def measures(read: Readings, voice: Voice) -> SideBySide:
+    """What stands behind the first page, in two tables beside one another."""
+    purchase, extra = voice.deal.purchase, voice.deal.returns.extra_on_exit
+    income = [
+        ("Required return a year", voice.required_rate()),
+        ("Hold", voice.years(read.hold)),
+        ("Exit income a year", voice.money(read.number("exit.income"))),
+        ("Exit yield", voice.rate(read.number("exit.yield"))),
+        ("Exit price", voice.money(read.number("exit.price"))),
+        ("Net exit, after selling costs", voice.money(read.number("exit.net"))),
+    ]
+    if extra:
+        income.insert(1, ("Extra return on the exit", voice.rate(extra)))
+    returns = [
+        ("Exit-value share", voice.share(read.number("exit_value_share"))),
+        ("Reference share at this hold", voice.share(read.number("reference_share"))),
+        ("IRR, unlevered, before tax", voice.rate(read.number("irr.unlevered"))),
     ]
     if voice.deal.loans:
-        rows.append(("IRR, levered", voice.rate(read.number("irr.levered")), "after debt"))
+        returns.append(("IRR, levered, before tax", voice.rate(read.number("irr.levered"))))
         for basis, label in (("noi", "NOI"), ("ncf", "net cash flow")):
             ratio, year = lowest_dscr(read, voice, basis)
-            rows.append((f"Lowest DSCR on {label}", ratio, year))
-    cash = voice.money(read.number("sources_uses.cash_to_close"))
-    rows.append(("Cash to close", cash, "after loans and deposits taken over"))
-    columns = (Column("", share=0.27), Column("", "right", 0.23), Column("", share=0.5))
-    return Table(columns, tuple(rows))
+            returns.append((f"Lowest DSCR on {label}, {year}", ratio))
+    returns.append(("Cash to close", voice.money(read.number("sources_uses.sources.equity"))))
+    if purchase.closing_date is not None:
+        returns.append(("Closing", day(purchase.closing_date, voice.locale)))
+    columns = (Column("", share=0.64), Column("", "right", 0.36))
+    return SideBySide((Table(columns, tuple(income)),), (Table(columns, tuple(returns)),))

@@ -29,7 +29,7 @@ from workbench.report.key_figures import key_figures, measures, tier_table
 from workbench.report.readings import Readings
 from workbench.report.slabs import stack_height
 from workbench.report.voice import Voice
-from workbench.report.wording import lead, rests_on
+from workbench.report.wording import lead, rests_on, sentence
 from workbench.text.locale import Locale
 from workbench.text.numbers import day
 
@@ -38,6 +38,8 @@ _AIR: dict[Paper, float] = {"a4": 5.5, "letter": 1.0}
 """What the longer sheet has room for between the key figures."""
 _WALL_HEIGHTS = (330.0, 470.0)
 _WALL_LETTERS = 8.6
+_REASON_ROOM = 75.0
+"""How much of a reason the wall shows, as a width in letter sizes."""
 _SHORT_TEXT = 150
 """Up to so many characters a text on the first page is shown whole there."""
 
@@ -100,7 +102,7 @@ def draw_wall_of(deal: Deal, read: Readings, voice: Voice, width: float, height:
         money=voice.short_money,
         share=voice.share,
         has_leases=any(space.leases for space in deal.spaces),
-        exit_reason=shorten(reason, 1.0, 60.0),
+        exit_reason=shorten(sentence(reason), 1.0, _REASON_ROOM),
     )
     return draw_wall(figures, width, height, _WALL_LETTERS)
 
@@ -120,13 +122,11 @@ def _second_page(deal: Deal, read: Readings, voice: Voice) -> tuple[Section, ...
 
 def _details(deal: Deal, voice: Voice) -> tuple[tuple[str, str], ...]:
     """The texts of the deal, and those of the first page that may have been cut there."""
-    estate, closing = deal.property, deal.purchase.closing_date
+    estate = deal.property
     whole = [("Name", estate.name), ("Place", estate.place), ("Kind", estate.kind)]
     whole += parties(deal.about, voice.locale)
     rows = [(label, text) for label, text in whole if len(text) > _SHORT_TEXT or "\n" in text]
     rows += [("Description", estate.description), ("Notes", estate.notes)]
-    if closing is not None:
-        rows.append(("Closing", day(closing, voice.locale)))
     return tuple((label, text.strip()) for label, text in rows if text.strip())
 
 

@@ -19,6 +19,8 @@ _FONTS: dict[Weight, str] = {
     "bold": "Lato-Bold",
     "italic": "Lato-Italic",
 }
+FIRST_FONT = _FONTS["regular"]
+"""What a page begins with; else it would name a font that is not embedded."""
 
 
 @cache

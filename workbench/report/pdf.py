@@ -9,7 +9,7 @@ from reportlab.pdfgen.canvas import Canvas
 from workbench.charts.lettering import lacking
 from workbench.report.document import Document, texts
 from workbench.report.layout import lay_out
-from workbench.report.painter import paint
+from workbench.report.painter import paint, register_fonts
 
 _LONGEST_PROPERTY = 300
 
@@ -26,7 +26,10 @@ def draw(document: Document) -> Drawn:
     """The PDF of a document; the same document always gives the same bytes."""
     pages = lay_out(document)
     target = BytesIO()
-    canvas = Canvas(target, invariant=1, pageCompression=1, lang="en")
+    register_fonts()
+    canvas = Canvas(
+        target, initialFontName="Lato-Regular", invariant=1, pageCompression=1, lang="en"
+    )
     canvas.setTitle(_property(f"{document.kind}: {document.title}"))
     canvas.setAuthor(_property(document.author))
     canvas.setSubject(_property(document.foot))

@@ -61,16 +61,22 @@ class Voice:
         return f"the end of year {hold} ({numbers.day(last, self.locale)})"
 
     def required_return(self) -> str:
-        """The required return as words: one rate, or the lowest and highest of the years."""
+        """The required return, with what is required of the sale beyond it."""
+        extra = self.deal.returns.extra_on_exit
+        rate = self.required_rate()
+        return f"{rate} ({self.rate(extra)} more on the sale)" if extra else rate
+
+    def required_rate(self) -> str:
+        """The required return: one rate, or the lowest and highest of the years."""
         hold = self.deal.leave.hold or 1
         row = self.deal.returns.required
         used = [rate for year, rate in row.items() if year <= hold]
         if not used:
             return f"— ({NOT_STATED})"
         low, high = min(used), max(used)
-        words = self.rate(low) if low == high else f"{self.rate(low)} to {self.rate(high)} by year"
-        extra = self.deal.returns.extra_on_exit
-        return f"{words} ({self.rate(extra)} more on the sale)" if extra else words
+        if low == high:
+            return self.rate(low)
+        return f"{self.rate(low)} to {self.rate(high)} by year"
 
     def size(self) -> str:
         """Units and area of the rent roll, as far as they are known."""

@@ -11,12 +11,11 @@ def lead(read: Readings, voice: Voice) -> Paragraph:
     value = read.number("value")
     if value is None:
         reason = read.reason("value", "exit") or "A figure it needs is missing"
-        return Paragraph((Run(f"No value can be given. {_sentence(reason)}"),), "lead")
-    worth = "is worth " if value > 0 else "would be worth less than nothing: "
+        return Paragraph((Run(f"No value can be given. {sentence(reason)}"),), "lead")
     runs = [
         Run("On these assumptions, and at a required return of "),
-        Run(f"{voice.required_return()}, the property {worth}"),
-        Run(voice.priced(value), "bold"),
+        Run(f"{voice.required_return()}, the property "),
+        *_worth(value, voice),
         Run(f"{_beside_price(read, voice)} "),
     ]
     share = read.number("exit_value_share")
@@ -29,6 +28,14 @@ def lead(read: Readings, voice: Voice) -> Paragraph:
     elif value <= 0:
         runs.append(Run("The value is not above zero, so no shares of it are given."))
     return Paragraph(tuple(runs), "lead")
+
+
+def _worth(value: float, voice: Voice) -> tuple[Run, ...]:
+    if value > 0:
+        return Run("is worth "), Run(voice.priced(value), "bold")
+    if value < 0:
+        return Run("would be worth less than nothing: "), Run(voice.priced(value), "bold")
+    return (Run("would be worth nothing"),)
 
 
 def _beside_price(read: Readings, voice: Voice) -> str:
@@ -63,13 +70,14 @@ def _tiers(read: Readings, voice: Voice) -> tuple[Run, ...]:
     )
     if in_hand is None or expected is None:
         return ()
-    runs = [
-        Run("Brought back to today, rent already under contract comes to "),
-        Run(voice.money(in_hand), "bold"),
-        Run(" and rent only expected to "),
-        Run(voice.money(expected), "bold"),
-        Run(", each after its share of the costs"),
-    ]
+    runs = [Run("No rent is under contract. Brought back to today, rent only expected comes to ")]
+    if in_hand:
+        runs = [
+            Run("Brought back to today, rent already under contract comes to "),
+            Run(voice.money(in_hand), "bold"),
+            Run(" and rent only expected to "),
+        ]
+    runs += [Run(voice.money(expected), "bold"), Run(", after its share of the costs")]
     if leaving is not None:
         runs += [
             Run(f"; the sale at {voice.sale_date(read.hold)} comes to "),
@@ -86,7 +94,7 @@ def _exit_beside_reference(read: Readings, voice: Voice) -> tuple[Run, ...]:
     hold = voice.years(read.hold)
     stated = (Run("The exit-value share is "), Run(voice.share(share), "bold"))
     if reference is None:
-        reason = _sentence(read.reason("reference_share") or "It cannot be computed")
+        reason = sentence(read.reason("reference_share") or "It cannot be computed")
         return (*stated, Run(f" at a hold of {hold}. There is no reference share. {reason}"))
     beyond = share - reference
     side = "above" if beyond >= 0 else "below"
@@ -120,7 +128,7 @@ def _sale(read: Readings, voice: Voice) -> tuple[Run, ...]:
     price = read.number("exit.price")
     if price is None:
         reason = read.reason("exit.price", "exit.present_value")
-        return (Run(f"The sale has no price. {_sentence(reason)}"),) if reason else ()
+        return (Run(f"The sale has no price. {sentence(reason)}"),) if reason else ()
     runs = [
         Run("The sale is taken at "),
         Run(voice.money(price), "bold"),
@@ -137,7 +145,7 @@ def _sale(read: Readings, voice: Voice) -> tuple[Run, ...]:
     return (*runs, Run("."))
 
 
-def _sentence(reason: str) -> str:
-    """A reason as the end of a sentence."""
+def sentence(reason: str) -> str:
+    """A reason as a sentence of its own; nothing if there is none."""
     text = reason.strip().rstrip(".")
-    return f"{text}."
+    return f"{text[0].upper()}{text[1:]}." if text else ""

@@ -111,6 +111,7 @@ def _works(shape: Shape) -> Iterator[Declared]:
 def _account(shape: Shape) -> Iterator[Declared]:
     """The balance after payment p and need w is max(0, balance before + p − w), all at once."""
     gross = Line("works_before_account")
+    drawn: Formula = NOTHING
     if shape.account == "account":
         yield Declared(
             "reserve_path",
@@ -130,11 +131,8 @@ def _account(shape: Shape) -> Iterator[Declared]:
             "draw on it as far as it reaches; no interest",
             path - least(0, running_least(path)),
         )
-        drawn = (
-            before(Line("reserve_balance"), OPENING) - Line("reserves") - Line("reserve_balance")
-        )
-    else:
-        drawn = NOTHING
+        held = before(Line("reserve_balance"), OPENING) - Line("reserves")
+        drawn = least(-gross, held)
     yield Declared(
         "works",
         "Works net of the reserve account",
