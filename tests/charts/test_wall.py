@@ -127,8 +127,8 @@ def test_the_words_of_an_empty_wall() -> None:
     assert draw_wall(wall_figures([], None), 262, 500).words == (
         "Value wall. Rent in hand 0, rent expected 0. No exit price. Nothing to stack yet."
     )
-    loss = draw_wall(wall_figures([(0.0, 0.0)], -1.0), 262, 500)
-    assert "Exit −1. The value" in loss.words
+    loss = draw_wall(wall_figures([(0.0, 0.0)], -1.0, has_leases=False), 262, 500)
+    assert "Exit −1. No leases entered" in loss.words
 
 
 @pytest.mark.parametrize("size", [(262, 500), (247, 430), (400, 900), (180, 260), (1200, 400)])

@@ -36,8 +36,9 @@ def test_the_ground_carries_wall_and_price() -> None:
 
 
 def test_nothing_to_scale() -> None:
-    figures = wall_figures([(0.0, 0.0)], 0.0, 0.0)
-    assert frame_of(figures, stack_of(figures), 11, (262, 500)).scale == 0
+    for amount in (0.0, 5e-324):
+        figures = wall_figures([(amount, 0.0)], 0.0, 0.0)
+        assert frame_of(figures, stack_of(figures), 11, (262, 500)).scale == 0
 
 
 def test_marks_in_money() -> None:

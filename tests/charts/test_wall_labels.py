@@ -26,8 +26,8 @@ def test_each_fifth_year_above_fifteen() -> None:
 
 
 def test_fewer_years_where_they_do_not_fit() -> None:
-    assert years_shown([(10.0, 0.0)] * 10, 2_000.0, 500) == ["2", "4", "6", "8", "10"]
-    assert years_shown([(10.0, 0.0)] * 10, 2_000.0, 200) == ["5", "10"]
+    assert years_shown([(10.0, 0.0)] * 10, 500.0, 600) == ["2", "4", "6", "8", "10"]
+    assert years_shown([(10.0, 0.0)] * 10, 1_000.0, 600) == ["5", "10"]
     assert years_shown([(0.0, 0.0)] * 3 + [(1.0, 0.0)], 9.0, 500) == ["4"]
 
 

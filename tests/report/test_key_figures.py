@@ -87,7 +87,7 @@ def test_the_figures_behind_it() -> None:
         "Lowest DSCR on NOI, year 3": "1.18",
         "Lowest DSCR on net cash flow, year 3": "1.05",
         "Cash to close": "1,316,000",
-        "Closing": "April 1, 2026",
+        "Closing": "Apr 1, 2026",
     }
 
 

@@ -80,6 +80,9 @@ def test_no_rent_under_contract() -> None:
     assert rested(figures(((0.0, 50.0),), 100.0))[0].startswith(
         "No rent is under contract. Brought back to today, rent only expected comes to 50, after"
     )
+    assert "The ground share is nil: none of the price stands on rent under contract." in rested(
+        figures(((0.0, 50.0),), 100.0)
+    )
 
 
 def test_a_share_below_its_reference() -> None:

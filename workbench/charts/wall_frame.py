@@ -12,6 +12,8 @@ _TRENCH_MARGIN = 9.0
 _LEADER = 14.0
 """Room between what stands out on the right and the labels there."""
 _BARE_MARGIN = 6.0
+_LEAST_REACH = 1e-250
+"""Below it an amount is nothing: its scale would be beyond what a float can hold."""
 
 
 @dataclass(frozen=True)
@@ -76,7 +78,7 @@ def _measured(figures: WallFigures, stack: Stack, high: float, above: float) -> 
     """Where the ground lies, and the height of one unit of money."""
     below = above / 2
     reach = max(stack.top, figures.price or 0.0, 0.0) + stack.depth
-    scale = (high - above - below) / reach if reach > 0 else 0.0
+    scale = (high - above - below) / reach if reach > _LEAST_REACH else 0.0
     return high - below - stack.depth * scale, scale
 
 

@@ -75,7 +75,7 @@ def _unit_rate(sizes: Array, when: Array) -> float | None:
     whole = np.floor(when)
     part = when - whole
     rate = 0.0
-    for _ in range(200):
+    while True:
         powers = sizes - np.log1p(part * rate) - whole * math.log1p(rate)
         largest = float(powers.max())
         worth = np.exp(powers - largest)
@@ -83,6 +83,6 @@ def _unit_rate(sizes: Array, when: Array) -> float | None:
         slope = float(worth @ (part / (1 + part * rate) + whole / (1 + rate))) / total
         following = max(rate + (largest + math.log(total)) / slope, (rate - 1) / 2)
         move, rate = abs(following - rate), following
-        if move <= 1e-10 * (0.01 + abs(rate)):  # the next step would be the square of this
-            break
-    return rate if rate > LOWEST else None
+        # The next step would be the square of this one, or the noise of the sums.
+        if move <= 1e-10 * (0.01 + abs(rate)) + 1e-14 / slope:
+            return rate if rate > LOWEST else None

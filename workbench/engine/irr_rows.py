@@ -64,7 +64,8 @@ def _certified(flows: Array, times: Array, step: float | None, start: float | No
     lead = np.where(np.arange(depth)[:, None] < turned, flows[:depth], 0.0)
     rates = _roots(flows, lead, times, step, start)
     # What is still to come, seen from each date, is the running balance with its sign turned. One
-    # change of sign needs no test of its own: what is still to come then never changes sign.
+    # change of sign needs no test of its own: what is still to come then never changes sign. Where
+    # rounding hides that, the row is searched like any other.
     least, most = range_ahead(flows, times, step, rates)
     pure = np.where(opening < 0, least >= 0, most <= 0)
     return np.where(pure & np.logical_or.reduce(against), rates, np.nan)

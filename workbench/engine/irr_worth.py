@@ -82,7 +82,10 @@ def annual(flows: Array, times: Array, rates: Array) -> Array:
     rate = effective[far]
     base = 1 + rate
     lost = (rate - (base - 1)) / base
-    since = times[:, None] - np.where(rate < 0, times[-1], 0.0)
+    used = part != 0
+    opening, closing = times[used.argmax(axis=0)], times[::-1][used[::-1].argmax(axis=0)]
+    after, before = times[:, None] - opening, times[:, None] - closing
+    since = np.where(rate < 0, np.minimum(before, 0.0), np.maximum(after, 0.0))
     with np.errstate(all="ignore"):
         pieces = scaled(part, np.abs(part).max(axis=0)) * base**-since * (1 - since * lost)
         move = base * np.add.reduce(pieces) / np.add.reduce(pieces * since)

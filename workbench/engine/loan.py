@@ -139,7 +139,10 @@ def schedule(
     length = interest_only + months if term is None else term
     if length < 1:
         raise ValueError("a loan needs a term of at least one month")
-    rate = np.broadcast_to(_monthly(rate_annual), (length,))
+    rate = _monthly(rate_annual)
+    if rate.shape not in ((), (length,)):
+        raise ValueError("there must be one rate, or one per month of the term")
+    rate = np.broadcast_to(rate, (length,))
     share = _shares(rate, months, interest_only)
     balance = np.asarray(principal * np.cumprod(1.0 - share), dtype=np.float64)
     before = np.concatenate(([principal], balance[:-1]))

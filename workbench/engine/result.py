@@ -125,9 +125,11 @@ class Result:
         return array[:, np.newaxis] if array.ndim == 1 else array.T
 
     def year(self, key: str) -> Floats:
-        """A line by deal year, shape (1 or trials, 41): months summed, year rows as they are."""
-        array = self.values[key]
-        if self.declared[key].per == "month":
+        """A line by deal year, shape (1 or trials, 41): months summed, balances at year end."""
+        array, declared = self.values[key], self.declared[key]
+        if declared.per == "month" and declared.standing:
+            array = array[11::12]
+        elif declared.per == "month":
             array = array.reshape(YEARS, 12, -1).sum(axis=1)
         return array.T
 

@@ -120,6 +120,6 @@ def measures(read: Readings, voice: Voice) -> SideBySide:
             returns.append((f"Lowest DSCR on {label}, {year}", ratio))
     returns.append(("Cash to close", voice.money(read.number("sources_uses.sources.equity"))))
     if purchase.closing_date is not None:
-        returns.append(("Closing", day(purchase.closing_date, voice.locale)))
-    columns = (Column("", share=0.64), Column("", "right", 0.36))
+        returns.append(("Closing", day(purchase.closing_date, voice.locale, short=True)))
+    columns = (Column("", share=0.71), Column("", "right", 0.29))
     return SideBySide((Table(columns, tuple(income)),), (Table(columns, tuple(returns)),))

@@ -4,61 +4,44 @@ from collections.abc import Mapping
 from dataclasses import replace
 from typing import Any
 
-from workbench.charts.lettering import MARK, lacking, shorten
-from workbench.charts.shapes import Picture
-from workbench.charts.wall import WallFigures, draw_wall
+from workbench.charts.lettering import MARK, lacking
 from workbench.deal.deal import Deal
-from workbench.report import sheet
-from workbench.report.blocks import column_slabs
 from workbench.report.cautions import FOOT, NOT_STATED, full_cautions, parties
-from workbench.report.document import (
-    Block,
-    Column,
-    Document,
-    Figure,
-    KeyFigures,
-    Paper,
-    Section,
-    SideBySide,
-    Table,
-    plain,
-    texts,
-)
+from workbench.report.document import Column, Document, Paper, Section, Table, plain, texts
+from workbench.report.first_page import first_page
 from workbench.report.gaps import gap_sections
-from workbench.report.key_figures import key_figures, measures, tier_table
+from workbench.report.key_figures import measures
 from workbench.report.readings import Readings
-from workbench.report.slabs import stack_height
 from workbench.report.voice import Voice
-from workbench.report.wording import lead, rests_on, sentence
+from workbench.report.wording import rests_on
 from workbench.text.locale import Locale
 from workbench.text.numbers import day
 
-_LEFT_SHARE = 0.5
-_AIR: dict[Paper, float] = {"a4": 5.5, "letter": 1.0}
-"""What the longer sheet has room for between the key figures."""
-_WALL_HEIGHTS = (330.0, 470.0)
-_WALL_LETTERS = 8.6
-_REASON_ROOM = 75.0
-"""How much of a reason the wall shows, as a width in letter sizes."""
 _SHORT_TEXT = 150
 """Up to so many characters a text on the first page is shown whole there."""
 
 
-def build(deal: Deal, figures: Mapping[str, Any], locale: Locale) -> Document:
-    """The memo of a deal; `figures` are those of `figures --json`, of which any may be missing."""
+def build(
+    deal: Deal, figures: Mapping[str, Any], locale: Locale, paper: Paper | None = None
+) -> Document:
+    """The memo of a deal, on the paper of its locale unless another is asked for.
+
+    `figures` are those of `figures --json`, of which any may be missing.
+    """
     read, voice = Readings(figures), Voice(deal, locale)
     about = deal.about
-    dated = day(about.prepared_on, locale) if about.prepared_on else f"date {NOT_STATED}"
     document = Document(
         kind="Purchase memo",
         title=_one_line(deal.property.name) or "Property without a name",
         subtitle=_subtitle(deal, voice),
         author=about.prepared_by,
-        dated=dated,
+        dated=day(about.prepared_on, locale) if about.prepared_on else f"date {NOT_STATED}",
         foot=FOOT,
-        sections=(*_first_page(deal, read, voice), *_second_page(deal, read, voice)),
-        paper=locale.paper,
+        sections=(),
+        paper=paper or locale.paper,
     )
+    sections = (*first_page(document, read, voice), *_second_page(deal, read, voice))
+    document = replace(document, sections=sections)
     return _with_mark_explained(document) if lacking("".join(texts(document))) else document
 
 
@@ -67,44 +50,6 @@ def _with_mark_explained(document: Document) -> Document:
     *others, last = document.sections
     note = plain(f"{MARK} stands for a character that the letters used here do not have.", "small")
     return replace(document, sections=(*others, replace(last, blocks=(*last.blocks, note))))
-
-
-def _first_page(deal: Deal, read: Readings, voice: Voice) -> tuple[Section, ...]:
-    paper = sheet.sheet_of(voice.locale.paper)
-    left_room, right_room = sheet.columns(paper.column, _LEFT_SHARE)
-    chosen = KeyFigures(key_figures(read, voice), _AIR[voice.locale.paper])
-    left: tuple[Block, ...] = (chosen, tier_table(read, voice))
-    low, high = _WALL_HEIGHTS
-    tall = min(max(stack_height(column_slabs(left, left_room, high)), low), high)
-    wall = Figure(draw_wall_of(deal, read, voice, right_room, tall))
-    who = Table(
-        (Column("", share=0.2), Column("", share=0.8)),
-        parties(deal.about, voice.locale),
-        most_lines=2,
-    )
-    return (
-        Section("", (lead(read, voice), SideBySide(left, (wall,), _LEFT_SHARE))),
-        Section("By whom, for whom and what for", (who,), together=True),
-    )
-
-
-def draw_wall_of(deal: Deal, read: Readings, voice: Voice, width: float, height: float) -> Picture:
-    """The value wall of a deal's figures."""
-    courses = read.courses()
-    exit_value = None if courses is None else read.number("exit.present_value")
-    reason = read.reason("exit.present_value", "exit.price", "stack", "value")
-    figures = WallFigures(
-        courses=courses or (),
-        exit=exit_value,
-        value=read.number("value"),
-        price=read.number("price"),
-        exit_share=read.number("exit_value_share"),
-        money=voice.short_money,
-        share=voice.share,
-        has_leases=any(space.leases for space in deal.spaces),
-        exit_reason=shorten(sentence(reason), 1.0, _REASON_ROOM),
-    )
-    return draw_wall(figures, width, height, _WALL_LETTERS)
 
 
 def _second_page(deal: Deal, read: Readings, voice: Voice) -> tuple[Section, ...]:

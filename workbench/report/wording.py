@@ -114,6 +114,8 @@ def _ground(read: Readings, voice: Voice) -> tuple[Run, ...]:
     ground = read.number("ground_share")
     if ground is None:
         return ()
+    if not ground:
+        return (Run("The ground share is nil: none of the price stands on rent under contract."),)
     return (
         Run("The ground share is "),
         Run(voice.share(ground), "bold"),

@@ -47,6 +47,7 @@ def borrow_lines(shape: Shape) -> Iterator[Declared]:
         "Loan balance",
         "balance of all loans at the month's end",
         total([Line(f"balance@{one}") for one in ids]),
+        standing=True,
     )
     yield _sum(
         "loan_amount",
@@ -63,8 +64,10 @@ def borrow_lines(shape: Shape) -> Iterator[Declared]:
     )
 
 
-def _sum(key: str, label: str, words: str, body: Formula, per: Per = "month") -> Declared:
-    return Declared(key, label, "money", per, words, body)
+def _sum(
+    key: str, label: str, words: str, body: Formula, per: Per = "month", standing: bool = False
+) -> Declared:
+    return Declared(key, label, "money", per, words, body, standing=standing)
 
 
 def _loan(identity: str, amortises: bool, has_term: bool) -> Iterator[Declared]:
@@ -86,7 +89,10 @@ def _loan(identity: str, amortises: bool, has_term: bool) -> Iterator[Declared]:
     )
     for name, label, words in _OUTPUTS:
         body = Output("loan", name, arguments)
-        yield Declared(f"{name}@{identity}", label, "money", "month", words, body)
+        standing = name == "balance"
+        yield Declared(
+            f"{name}@{identity}", label, "money", "month", words, body, standing=standing
+        )
     yield _sum(
         f"service@{identity}",
         "Debt service",

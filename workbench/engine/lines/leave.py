@@ -101,7 +101,7 @@ def _reference(shape: Shape) -> Iterator[Declared]:
         "year 41 moved one year on and run for ever at the lasting growth, discounted to closing",
         at_year(plain, LAST) * (1 + growth) / (last_return - growth),
         unless=(
-            (last_return <= growth, "return_not_above_growth"),
+            (1 + last_return <= 1 + growth, "return_not_above_growth"),
             ((1 + growth) * income <= 0, "no_lasting_income"),
         ),
     )

@@ -1,6 +1,6 @@
 """The declaration of a line: what it is, how it is computed, when it cannot be given."""
 
-from dataclasses import dataclass, field
+from dataclasses import dataclass
 from typing import Literal, TypeAlias
 
 from workbench.engine.formula import Compare, Formula
@@ -37,4 +37,6 @@ class Declared:
     body: Formula | Output
     unless: tuple[Unless, ...] = ()
     source: str = "common practice, no source"
-    sign: Literal[1, -1] = field(default=1)
+    sign: Literal[1, -1] = 1
+    standing: bool = False
+    """A balance: the figure of a year is the one at its end, not a sum."""

@@ -120,6 +120,7 @@ def _account(shape: Shape) -> Iterator[Declared]:
             "month",
             "opening balance plus all payments less all works so far",
             OPENING + running_sum(gross - Line("reserves")),
+            standing=True,
         )
         path = Line("reserve_path")
         yield Declared(
@@ -130,6 +131,7 @@ def _account(shape: Shape) -> Iterator[Declared]:
             "what the account holds at the month's end: each payment goes in first, then works "
             "draw on it as far as it reaches; no interest",
             path - least(0, running_least(path)),
+            standing=True,
         )
         held = before(Line("reserve_balance"), OPENING) - Line("reserves")
         drawn = least(-gross, held)
