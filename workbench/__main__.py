@@ -8,7 +8,7 @@ from collections.abc import Sequence
 
 from workbench import __version__
 
-COMMANDS = ("figures", "document", "check")
+COMMANDS = ("figures", "document", "check", "working")
 
 
 def parser() -> argparse.ArgumentParser:
@@ -39,6 +39,10 @@ def main(words: Sequence[str] | None = None) -> int:
         status = module.run(arguments)
         sys.stdout.flush()
         return int(status)
+    except BrokenPipeError:
+        # Whoever read the output has had enough; Python must not complain of it on the way out.
+        os.dup2(os.open(os.devnull, os.O_WRONLY), sys.stdout.fileno())
+        return 0
     except (UnreadableError, OSError) as error:
         return say_fault(arguments.deal, error)
 

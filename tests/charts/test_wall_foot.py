@@ -26,6 +26,12 @@ def test_a_narrow_wall_has_shorter_bricks() -> None:
     assert bond_of("exit", 11, 49.5).length == bond_of("exit", 11, 99).length / 2
 
 
+def test_a_very_wide_wall_has_longer_bricks() -> None:
+    assert bond_of("exit", 11, 660).length == bond_of("exit", 11, 200).length
+    assert bond_of("exit", 11, 1320).length == 2 * bond_of("exit", 11, 200).length
+    assert bond_of("exit", 11, 1320).joint == bond_of("exit", 11, 200).joint
+
+
 def test_a_plain_wall_needs_no_notes() -> None:
     assert notes(wall_figures(BASE, 1e6, 1e6)) == ()
 

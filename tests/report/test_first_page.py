@@ -33,13 +33,9 @@ def test_it_holds_key_figures_wall_and_parties(deal: Deal, paper: Paper) -> None
     assert collisions(page) == []
 
 
-def test_a_longer_sheet_has_more_air_and_a_higher_wall() -> None:
-    def lowest(page: Picture) -> float:
-        bricks = [s for s in page.shapes if isinstance(s, Rect) and s.fill == "in_hand"]
-        return max(brick.y + brick.height for brick in bricks)
+def test_long_texts_and_a_shorter_sheet_set_it_tighter() -> None:
+    def stone(page: Picture) -> float:
+        return max(s.height for s in page.shapes if isinstance(s, Rect) and s.fill == "exit")
 
-    assert (
-        lowest(first(DEAL, "a4"))
-        > lowest(first(DEAL, "letter"))
-        > lowest(first(LONG_DEAL, "letter"))
-    )
+    tighter = stone(first(LONG_DEAL, "a4"))
+    assert stone(first(DEAL, "a4")) > tighter > stone(first(LONG_DEAL, "letter"))

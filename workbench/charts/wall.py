@@ -59,7 +59,7 @@ def _parts(frame: Frame, course: Course) -> list[tuple[str, Box]]:
     parts: list[tuple[str, Box]] = []
     x = whole.x
     for piece in course.pieces:
-        wide = whole.width * piece.amount / sum_of
+        wide = whole.width * (piece.amount / sum_of)
         parts.append((piece.key, Box(x, whole.y, wide, whole.height)))
         x += wide
     return parts

@@ -14,11 +14,12 @@ _TIER_NAMES: dict[Tier, str] = {"in_hand": "rent in hand", "expected": "rent exp
 def bond_of(tier: Tier, size: float, wall: float) -> Bond:
     """Long dark bricks for rent in hand, short pale ones for rent expected, stones for the exit.
 
-    A narrow wall has shorter bricks, so that there is still a bond to be seen.
+    A narrow wall has shorter bricks, so that there is still a bond to be seen, and a very wide one
+    longer ones.
     """
     lengths: dict[Tier, float] = {"in_hand": 2.9, "expected": 1.25, "exit": 6.2}
     unit = min(size, wall / 9)
-    return Bond(tier, lengths[tier] * unit, unit / 11)
+    return Bond(tier, lengths[tier] * max(unit, wall / 60), unit / 11)
 
 
 def notes_of(figures: WallFigures, stack: Stack) -> tuple[str, ...]:
@@ -26,7 +27,7 @@ def notes_of(figures: WallFigures, stack: Stack) -> tuple[str, ...]:
     notes: list[str] = []
     if not figures.has_leases:
         notes.append("No leases entered: no rent is in hand.")
-    elif figures.courses and not any(course.in_hand for course in figures.courses):
+    elif not any(c.in_hand for c in figures.courses) and any(c.expected for c in figures.courses):
         notes.append("No dated lease runs: no rent is in hand.")
     if figures.exit is None:
         reason = figures.exit_reason.strip().rstrip(".")

@@ -1,5 +1,6 @@
 """Everything that can be wrong in a deal that was read whole: a list of issues, never an error."""
 
+import datetime
 from collections.abc import Iterator, Sequence
 from itertools import chain
 from typing import Any
@@ -8,7 +9,7 @@ from workbench.deal.checks_leases import check_spaces
 from workbench.deal.checks_records import check_records
 from workbench.deal.checks_sections import check_sections
 from workbench.deal.deal import Deal
-from workbench.deal.inputs import YEARS, Leaf, leaves
+from workbench.deal.inputs import DAYS, YEARS, Leaf, leaves
 from workbench.deal.issues import Issue
 
 
@@ -31,7 +32,11 @@ def _check_leaf(leaf: Leaf) -> Iterator[Issue]:
     elif isinstance(leaf.value, str):
         if leaf.input.high is not None and len(leaf.value) > leaf.input.high:
             yield Issue(leaf.path, "too_long", len(leaf.value), None, leaf.input.high)
-    elif isinstance(leaf.value, int | float) and not isinstance(leaf.value, bool):
+    elif isinstance(leaf.value, datetime.date):
+        if not DAYS[0] <= leaf.value <= DAYS[1]:
+            other = {"first": DAYS[0], "last": DAYS[1]}
+            yield Issue(leaf.path, "no_such_day", leaf.value, other=other)
+    else:
         yield from _check_range(leaf, leaf.path, leaf.value)
 
 
@@ -50,7 +55,7 @@ def _check_row(leaf: Leaf) -> Iterator[Issue]:
 
 def _check_range(leaf: Leaf, path: str, value: float) -> Iterator[Issue]:
     low, high = _bounds(leaf, value)
-    if (low is not None and value < low) or (high is not None and value > high):
+    if (low is not None and not value >= low) or (high is not None and not value <= high):
         yield Issue(path, "out_of_range", value, low, high)
 
 

@@ -8,6 +8,7 @@ from collections.abc import Iterator
 from dataclasses import is_dataclass
 from typing import Any
 
+from workbench.deal.checks_leases import is_dated
 from workbench.deal.deal import ID_LETTERS, Deal
 from workbench.deal.inputs import declared
 from workbench.deal.issues import Issue
@@ -68,7 +69,7 @@ def misnamed(deal: Deal) -> Iterator[tuple[str, str]]:
 
 
 def _check_references(deal: Deal) -> Iterator[Issue]:
-    dated = {lease.id for space in deal.spaces for lease in space.leases if lease.start}
+    dated = {lease.id for space in deal.spaces for lease in space.leases if is_dated(lease)}
     for item in deal.other_income:
         if item.lease is not None and item.lease not in dated:
             yield Issue(f"other_income@{item.id}.lease", "no_such_lease", item.lease)

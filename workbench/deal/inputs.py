@@ -1,5 +1,6 @@
 """The one declaration an input has: `Annotated[type, Input(...)]` on a field of a record."""
 
+import datetime
 from collections.abc import Iterator, Mapping
 from dataclasses import dataclass, fields, is_dataclass
 from typing import Annotated, Any, TypeAlias, get_args, get_origin, get_type_hints
@@ -9,6 +10,9 @@ YearRow: TypeAlias = Mapping[int, float]
 
 YEARS = 41
 """The last deal year that flows are built to, and the last that a year row may name."""
+
+DAYS = (datetime.date(1000, 1, 1), datetime.date(2999, 12, 31))
+"""The first and the last day that an input of unit date may name."""
 
 
 @dataclass(frozen=True)

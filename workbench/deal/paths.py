@@ -4,6 +4,7 @@ A list item is named by its list and its id wherever it is nested: `leases@e3.st
 year row may be named whole (`earn.vacancy`) or year by year (`earn.vacancy.3`).
 """
 
+import re
 from collections.abc import Mapping
 from dataclasses import fields, is_dataclass, replace
 from typing import Any, TypeAlias
@@ -11,6 +12,8 @@ from typing import Any, TypeAlias
 from workbench.deal.inputs import Field, declared
 
 Step: TypeAlias = str | int
+
+_YEAR = re.compile("[1-9][0-9]{0,8}")
 
 
 class UnknownPathError(LookupError):
@@ -29,34 +32,22 @@ def locate(deal: Any, path: str) -> tuple[Step, ...]:
     """
     head, *rest = path.split(".")
     steps: tuple[Step, ...] = ()
-    record = deal
     if "@" in head:
         steps = find_item(deal, head)
-        record = value_at(deal, steps)
-    elif head:
+    else:
         rest = [head, *rest]
+    record = value_at(deal, steps)
+    in_row = False
     for position, part in enumerate(rest):
-        if not is_dataclass(record) or part not in declared(type(record)):
-            year = _year(record, part)
-            if year is None or position != len(rest) - 1:
-                raise UnknownPathError(path, part)
-            return (*steps, year)
-        steps = (*steps, part)
-        record = _row_or_value(record, part)
+        if is_dataclass(record) and part in declared(type(record)):
+            steps = (*steps, part)
+            in_row = declared(type(record))[part].is_row
+            record = getattr(record, part)
+        elif in_row and position == len(rest) - 1 and _YEAR.fullmatch(part):
+            return (*steps, int(part))
+        else:
+            raise UnknownPathError(path, part)
     return steps
-
-
-def _row_or_value(record: Any, name: str) -> Any:
-    value = getattr(record, name)
-    if value is None and declared(type(record))[name].is_row:
-        return {}
-    return value
-
-
-def _year(row: Any, part: str) -> int | None:
-    if isinstance(row, Mapping) and part.isascii() and part.isdigit() and int(part) > 0:
-        return int(part)
-    return None
 
 
 def find_item(deal: Any, name: str) -> tuple[Step, ...]:

@@ -2,7 +2,7 @@
 
 import datetime
 import math
-from collections.abc import Iterator, Mapping
+from collections.abc import Callable, Iterator, Mapping
 from dataclasses import dataclass
 from itertools import pairwise
 
@@ -66,8 +66,10 @@ def compile_deal(deal: Deal) -> Plan:
     shape = shape_of(deal)
     made = program(shape)
     issues = tuple(check(deal))
-    wrong = {path: one for path, one in faulty(issues).items() if one.code not in HARMLESS}
-    blocked = dict(_blocked_facts(deal, wrong))
+    wrong = faulty([one for one in issues if one.code not in HARMLESS])
+    blocked: dict[str, Issue] = {}
+    for name, issue in _blocked_facts(deal, wrong):
+        blocked.setdefault(name, issue)
     facts = _facts(deal, blocked)
     inputs = {path: _given(deal, path, wrong, blocked) for path in made.givens}
     return Plan(deal, shape, made, inputs, facts, issues, blocked)
@@ -102,45 +104,80 @@ def expand(row: YearRow, bad: set[int] | frozenset[int] = frozenset()) -> Floats
 def _blocked_facts(deal: Deal, wrong: Mapping[str, Issue]) -> Iterator[tuple[str, Issue]]:
     """Which facts cannot be made, and the first issue that stands in the way."""
     for path, issue in wrong.items():
-        head = path.partition("@")[0].partition(".")[0]
-        if head in ("spaces", "leases", "steps"):
-            for name in _ROLL:
-                yield name, issue
-        if head == "works":
-            yield from (("works", issue), ("works_today", issue))
-        if issue.code == "closing_date_needed":
-            for name in (*_ROLL, "works", "works_today"):
-                yield name, issue
-        if issue.code == "areas_needed":
-            yield "area", issue
-        if issue.code == "no_such_lease":
-            yield f"tied@{path.partition('@')[2].partition('.')[0]}", issue
+        head, _, item = path.partition(".")[0].partition("@")
+        names: tuple[str, ...] = ()
+        if head == "spaces":
+            names = _space_facts(deal, item, path.partition(".")[2])
+        elif head in ("leases", "steps"):
+            names = (*KINDS, *(f"tied@{one.id}" for one in deal.other_income if one.lease == item))
+        elif head == "works":
+            names = _WORKS
+        elif path == "purchase.closing_date":
+            names = _dated_facts(deal)
+        elif issue.code == "areas_needed":
+            names = ("area",)
+        elif issue.code == "no_such_lease":
+            names = (f"tied@{item}",)
+        yield from ((name, issue) for name in names)
 
 
-_ROLL = (*KINDS, "market_total", "units")
+def _space_facts(deal: Deal, item: str, field: str) -> tuple[str, ...]:
+    """What hangs on a field of a space; an area counts for rents given by area alone."""
+    if field == "area":
+        space = next(one for one in deal.spaces if one.id == item)
+        rents = (space.market_rent, *(lease.rent for lease in space.leases))
+        by_area = any(rent.of == "area" for rent in rents)
+        return (*KINDS, "market_total", "area") if by_area else ("area",)
+    return (*KINDS, *_COUNTED) if field in ("", "count") else (*KINDS, "market_total")
+
+
+def _dated_facts(deal: Deal) -> tuple[str, ...]:
+    """What hangs on the closing date in this deal."""
+    leases = any(is_dated(lease) for space in deal.spaces for lease in space.leases)
+    works = any(one.date is not None for one in deal.works)
+    tied = (f"tied@{one.id}" for one in deal.other_income if one.lease is not None)
+    return (*(KINDS if leases else ()), *(_WORKS if works else ()), *tied)
 
 
 def _facts(deal: Deal, blocked: Mapping[str, Issue]) -> dict[str, Floats]:
-    """Everything the lines read that is not an input; not a number where an issue blocks it."""
-    unknown = {name: np.full((MONTHS, 1), np.nan) for name in blocked}
-    return {**CALENDAR, **_roll_facts(deal), **_works_facts(deal), **_tied(deal), **unknown}
+    """Everything the lines read that is not an input; not a number where an issue blocks it.
+
+    What is blocked is not computed at all: a faulty date may lie beyond any calendar.
+    """
+    facts = dict(CALENDAR)
+    if not blocked.keys() & KINDS:
+        facts |= scatter(pieces(deal.spaces, deal.purchase.closing_date))
+    facts |= {name: _once(of(deal)) for name, of in _COUNTED.items() if name not in blocked}
+    if not blocked.keys() & _WORKS:
+        facts |= _works_facts(deal)
+    facts |= _tied(deal, blocked)
+    for name in blocked:
+        facts[name] = _once(math.nan) if name in _COUNTED else np.full((MONTHS, 1), math.nan)
+    return facts
 
 
-def _roll_facts(deal: Deal) -> dict[str, Floats]:
-    spaces = deal.spaces
-    counts = [math.nan if space.count is None else float(space.count) for space in spaces]
-    areas = [math.nan if space.area is None else space.area for space in spaces]
-    market = [monthly(space, space.market_rent) for space in spaces]
-    return {
-        **scatter(pieces(spaces, deal.purchase.closing_date)),
-        "market_total": _once(math.fsum(market)),
-        "units": _once(math.fsum(counts)),
-        "area": _once(math.fsum(count * area for count, area in zip(counts, areas, strict=True))),
-    }
+def _market_total(deal: Deal) -> float:
+    return math.fsum(monthly(space, space.market_rent) for space in deal.spaces)
+
+
+def _units(deal: Deal) -> float:
+    return math.fsum(space.count or math.nan for space in deal.spaces)
+
+
+def _area(deal: Deal) -> float:
+    return math.fsum((space.count or math.nan) * (space.area or math.nan) for space in deal.spaces)
+
+
+_COUNTED: Mapping[str, Callable[[Deal], float]] = {
+    "market_total": _market_total,
+    "units": _units,
+    "area": _area,
+}
+_WORKS = ("works", "works_today")
 
 
 def _works_facts(deal: Deal) -> dict[str, Floats]:
-    facts = {name: np.zeros((MONTHS, 1)) for name in ("works", "works_today")}
+    facts = {name: np.zeros((MONTHS, 1)) for name in _WORKS}
     for works in deal.works:
         month = _month_of(works, deal.purchase.closing_date)
         if month is not None and month < MONTHS:
@@ -155,14 +192,14 @@ def _month_of(works: Works, closing: datetime.date | None) -> int | None:
     return None if works.year is None else 12 * (works.year - 1) + works.month - 1
 
 
-def _tied(deal: Deal) -> dict[str, Floats]:
+def _tied(deal: Deal, blocked: Mapping[str, Issue]) -> dict[str, Floats]:
     """For each income tied to a lease, the share of each month's days under it."""
     closing = deal.purchase.closing_date
     leases = {lease.id: lease for space in deal.spaces for lease in space.leases}
     facts = {}
     for one in deal.other_income:
         lease = leases.get(one.lease or "")
-        if one.lease is not None:
+        if one.lease is not None and f"tied@{one.id}" not in blocked:
             facts[f"tied@{one.id}"] = np.zeros((MONTHS, 1))
             if lease is not None and is_dated(lease) and closing is not None:
                 span = lease_positions(lease, month_starts(closing))

@@ -5,58 +5,15 @@ deal at one place in time, or a set of cells that are added, multiplied or searc
 given, the expression comes to the figure again. Words and rounding are left to whoever prints it.
 """
 
-from collections.abc import Callable, Mapping
-from dataclasses import dataclass, field
-from typing import Literal, TypeAlias
-
-import numpy as np
+from dataclasses import dataclass
 
 from workbench.engine import formula as f
 from workbench.engine.interpreter import Values
-from workbench.engine.kernels import KERNELS, Row
+from workbench.engine.kernels import KERNELS
 from workbench.engine.lines import Declared, Output
-from workbench.engine.lines.line import Per
+from workbench.engine.operands import Cell, Operand, Ref, Span, Token
 from workbench.engine.result import Result
-from workbench.engine.roll import KINDS, piece_in_year, pieces
-from workbench.engine.rows import row_of
-
-Kind: TypeAlias = Literal["line", "input", "fact", "cells"]
-How: TypeAlias = Literal["one", "sum", "product", "least", "first"]
-Span: TypeAlias = Literal["year", "month", "date", "once"]
-
-
-@dataclass(frozen=True)
-class Cell:
-    """One of several figures behind an operand: when, or of which lease, and what it is."""
-
-    key: str
-    at: int | None
-    value: float
-    parts: tuple[tuple[str, float], ...] = ()
-
-
-@dataclass(frozen=True)
-class Operand:
-    """What an expression names by number. `at` is a year or month from 1, or a date from 0."""
-
-    kind: Kind
-    key: str
-    span: Span
-    at: int | None
-    value: float
-    how: How = "one"
-    cells: tuple[Cell, ...] = ()
-    of: f.Formula | None = field(default=None, compare=False, repr=False)
-
-
-@dataclass(frozen=True)
-class Ref:
-    """The place of an operand in an expression, from 1."""
-
-    number: int
-
-
-Token: TypeAlias = str | float | Ref
+from workbench.engine.writer import Writer
 
 
 @dataclass(frozen=True)
@@ -69,7 +26,8 @@ class Working:
     """
 
     key: str
-    year: int | None
+    span: Span
+    at: int | None
     value: float | None
     declared: Declared
     tokens: tuple[Token, ...]
@@ -87,7 +45,8 @@ def working(result: Result, key: str, year: int | None = None) -> Working:
     key : str
         A line of the plan.
     year : int, optional
-        Deal year from 1, for lines by month (their sum over the year) and by year.
+        Deal year from 1, for lines by month (their sum over the year, a balance at its end) and by
+        year.
 
     Returns
     -------
@@ -100,226 +59,78 @@ def working(result: Result, key: str, year: int | None = None) -> Working:
     ValueError
         A year is missing, superfluous or not one of 1…41.
     """
+    timed = result.declared[key].per in ("month", "year")
+    if timed != (year is not None):
+        raise ValueError("a line by month or year needs a year, others have none")
+    per = result.declared[key].per
+    return working_at(result, key, "year" if timed else per, year)
+
+
+def working_at(result: Result, key: str, span: Span, at: int | None) -> Working:
+    """The working of a line at any place in time: what an operand of another working names.
+
+    `at` is a year or month from 1, a date from 0, or None for a single figure. Errors are those
+    of `working`.
+    """
     declared = result.declared[key]
-    timed = declared.per in ("month", "year")
-    if timed != (year is not None) or (year is not None and not 1 <= year <= 41):
-        raise ValueError("a line by month or year needs a year from 1 to 41, others none")
-    value = result.figure(key, year) if declared.per != "date" else None
-    writer = _Writer(result)
-    if isinstance(declared.body, Output):
-        return _kernel_working(result, declared, declared.body, year, value)
-    if declared.per == "month" and year is not None:
-        within = writer.cell if declared.standing else writer.in_year
-        tokens = within(declared.body, 12 * year - 1 if declared.standing else year - 1)
-    elif declared.per == "year" and year is not None:
-        tokens = writer.cell(declared.body, year - 1)
-    elif declared.per == "once":
-        tokens = writer.cell(declared.body, 0)
+    position = _position(result, key, span, at)
+    array = result.values[key]
+    if span == "year":
+        value = result.figure(key, at)
+    elif at is None:
+        value = result.figure(key) if span == "once" else None
     else:
-        tokens = (writer.gather(f.Line(key), range(len(result.values[key])), "sum"),)
-    return Working(key, year, value, declared, tokens, tuple(writer.operands))
+        value = float(array[position, 0])
+    if isinstance(declared.body, Output):
+        return _kernel_working(result, declared, declared.body, span, at, value)
+    writer = Writer(result)
+    tokens = _tokens(writer, declared, declared.body, span, position)
+    return Working(key, span, at, value, declared, tokens, tuple(writer.operands))
+
+
+def _position(result: Result, key: str, span: Span, at: int | None) -> int:
+    """The place along the line's own row, from 0; for a year of months the year."""
+    length = {"once": 1, "year": 41}.get(span, len(result.values[key]))
+    first = 0 if span == "date" else 1
+    if at is None:
+        return 0
+    if not first <= at < length + first:
+        raise ValueError(f"{key}: {span} {at} is not one of {first}…{length + first - 1}")
+    return at - first
+
+
+def _tokens(
+    writer: Writer, declared: Declared, body: f.Formula, span: Span, position: int
+) -> tuple[Token, ...]:
+    if span == "year" and declared.per == "month":
+        if declared.standing:
+            return writer.cell(body, 12 * position + 11)
+        return writer.in_year(body, position)
+    return writer.cell(body, position)
 
 
 def _kernel_working(
-    result: Result, declared: Declared, body: Output, year: int | None, value: float | None
+    result: Result,
+    declared: Declared,
+    body: Output,
+    span: Span,
+    at: int | None,
+    value: float | None,
 ) -> Working:
     """The kernel's own rows in place of an expression."""
     kernel = KERNELS[body.kernel]
     values = Values(result)
     arguments = [values.of(one) for one in body.arguments]
-    rows: tuple[Row, ...] = ()
-    if value is not None or year is not None:
-        rows = kernel.rows(arguments, body.name, year)
+    month = at if span == "month" else None
+    year = at if month is None else (month - 1) // 12 + 1
+    rows = kernel.rows(arguments, body.name, year)
+    if month is not None:
+        standing = declared.standing
+        rows = tuple(row for row in rows if row.at == month or (standing and row.at < month))
     cells = tuple(Cell(declared.key, row.at, row.value, row.parts) for row in rows)
-    span: Span = "date" if kernel.solves else "month"
     total = float(sum(cell.value for cell in cells))
-    operand = Operand("cells", declared.key, span, None, total, "sum", cells)
-    return Working(declared.key, year, value, declared, (Ref(1),), (operand,), solved=kernel.solves)
-
-
-_STRENGTH = {"+": 1, "−": 1, "×": 2, "÷": 2, "^": 3}
-_GATHERED: Mapping[str, How] = {
-    "running_sum": "sum",
-    "running_product": "product",
-    "running_least": "least",
-    "later_sum": "sum",
-}
-
-
-class _Writer:
-    """Writes expressions, numbering each operand where it is first met."""
-
-    def __init__(self, result: Result) -> None:
-        self.result = result
-        self.values = Values(result)
-        self.operands: list[Operand] = []
-        self.rows: dict[str, Per] = {key: one.per for key, one in result.declared.items()}
-
-    def cell(self, node: f.Formula, at: int) -> tuple[Token, ...]:
-        """The expression of one cell of a formula; `at` counts its row from 0."""
-        match node:
-            case f.Number(value=value):
-                return (value,)
-            case f.Line() | f.Given() | f.Fact():
-                return (self._leaf(node, at),)
-            case f.Pair():
-                return self._pair(node, lambda part: self.cell(part, at))
-            case f.Where(condition=condition, yes=yes, no=no):
-                return self.cell(yes if self._met(condition, at) else no, at)
-            case f.Look():
-                return self._look(node, at)
-            case f.Before(of=of, first=first) | f.OnDates(of=of, first=first):
-                return self.cell(first, 0) if at == 0 else self.cell(of, at - 1)
-            case f.AtYear(of=of, year=year):
-                return self.cell(of, int(self.values.of(year).flat[0]) - 1)
-            case f.OnDate(of=of, month=month):
-                return self.cell(of, 0) if self.values.of(month).flat[0] == at else (0.0,)
-            case f.FirstDate(of=of):
-                return (self.gather(of, range(len(self.values.of(of))), "first"),)
-        raise TypeError(f"{type(node).__name__} has no cell")
-
-    def in_year(self, node: f.Formula, year: int) -> tuple[Token, ...]:
-        """The expression of twelve months' sum: taken inside wherever the sum allows it."""
-        if self._steady(node):
-            return self._scaled(12.0, self.cell(node, 12 * year))
-        match node:
-            case f.Line() | f.Fact():
-                return (self._year_leaf(node, year),)
-            case f.Pair(sign="+" | "−"):
-                return self._pair(node, lambda part: self.in_year(part, year))
-            case f.Pair(sign="×", left=left) if self._steady(left):
-                return self._split(node, left, year)
-            case f.Pair(sign="×" | "÷", right=right) if self._steady(right):
-                return self._split(node, right, year)
-        return (self.gather(node, range(12 * year, 12 * year + 12), "sum"),)
-
-    def _split(self, node: f.Pair, steady: f.Formula, year: int) -> tuple[Token, ...]:
-        return self._pair(
-            node,
-            lambda part: self.cell(part, 12 * year) if part is steady else self.in_year(part, year),
-        )
-
-    def _steady(self, node: f.Formula) -> bool:
-        """Whether a formula is the same in each month of a year."""
-        match node:
-            case f.Look(along=along):
-                return along == "of_year"
-            case f.Pair(left=left, right=right):
-                return self._steady(left) and self._steady(right)
-        return row_of(node, self.rows) == "once"
-
-    @staticmethod
-    def _scaled(times: float, tokens: tuple[Token, ...]) -> tuple[Token, ...]:
-        return (times, " × ", "(", *tokens, ")") if len(tokens) > 1 else (times, " × ", *tokens)
-
-    def _pair(
-        self, node: f.Pair, write: Callable[[f.Formula], tuple[Token, ...]]
-    ) -> tuple[Token, ...]:
-        left, right = write(node.left), write(node.right)
-        if node.sign in ("least", "greatest"):
-            return (f"{node.sign}(", *left, "; ", *right, ")")
-        if node.left == f.Number(0.0) and node.sign == "−":
-            return ("−", *_bracketed(right, 2))
-        strength = _STRENGTH[node.sign]
-        after = strength + (node.sign in "−÷^")
-        before_it = strength + (node.sign == "^")
-        return (*_bracketed(left, before_it), f" {node.sign} ", *_bracketed(right, after))
-
-    def _met(self, condition: f.Compare, at: int) -> bool:
-        cells = self.values.of(condition)
-        return bool(cells.flat[at] if cells.size > 1 else cells.flat[0])
-
-    def _look(self, node: f.Look, at: int) -> tuple[Token, ...]:
-        match node.along:
-            case "following":
-                return self.cell(node.of, at + 1)
-            case "year_sum":
-                return self.in_year(node.of, at)
-            case "year_end":
-                return self.cell(node.of, 12 * at + 11)
-            case "of_year":
-                return self.cell(node.of, at // 12)
-            case "month_starts":
-                return self.cell(node.of, at) if at < len(self.values.of(node.of)) else (0.0,)
-            case "over_dates":
-                moved = np.flatnonzero(self.values.of(node.of)[:, 0])
-                return (self.gather(node.of, moved.tolist(), "sum"),)
-            case "later_sum":
-                cells = range(at + 1, len(self.values.of(node.of)))
-                return (self.gather(node.of, cells, "sum"),)
-            case _:
-                return (self.gather(node.of, range(at + 1), _GATHERED[node.along]),)
-
-    def gather(self, node: f.Formula, cells: list[int] | range, how: How) -> Ref:
-        """One operand for many cells of a formula."""
-        row = row_of(node, self.rows)
-        array = self.values.of(node)
-        first = 0 if row == "date" else 1
-        key = node.key if isinstance(node, f.Line) else ""
-        shown = tuple(Cell(key, at + first, float(array[at, 0])) for at in cells)
-        value = _gathered([cell.value for cell in shown], how)
-        span: Span = row
-        return self._operand(Operand("cells", key, span, None, value, how, shown, node))
-
-    def _leaf(self, node: f.Line | f.Given | f.Fact, at: int) -> Ref:
-        row = row_of(node, self.rows)
-        array = self.values.of(node)
-        value = float(array.flat[0] if row == "once" else array[at, 0])
-        when = None if row == "once" else at + (row != "date")
-        return self._operand(Operand(*_named(node), row, when, value))
-
-    def _year_leaf(self, node: f.Line | f.Given | f.Fact, year: int) -> Ref:
-        """Twelve months of a line or a fact; a fact of the rent roll says which leases."""
-        value = float(self.values.of(node)[12 * year : 12 * year + 12, 0].sum())
-        kind, key = _named(node)
-        if isinstance(node, f.Fact) and key in KINDS:
-            deal = self.result.plan.deal
-            amounts = [
-                (piece.of, piece_in_year(piece, year + 1))
-                for piece in pieces(deal.spaces, deal.purchase.closing_date)
-                if piece.kind == key
-            ]
-            cells = tuple(Cell(of, None, amount) for of, amount in amounts if amount)
-            return self._operand(Operand("fact", key, "year", year + 1, value, "sum", cells))
-        return self._operand(Operand(kind, key, "year", year + 1, value))
-
-    def _operand(self, operand: Operand) -> Ref:
-        if operand not in self.operands:
-            self.operands.append(operand)
-        return Ref(self.operands.index(operand) + 1)
-
-
-def _bracketed(tokens: tuple[Token, ...], strength: int) -> tuple[Token, ...]:
-    """Brackets round an expression whose weakest sign binds less than it must."""
-    depth, weakest = 0, 9
-    for token in tokens:
-        if isinstance(token, str):
-            if depth == 0 and token.strip() in _STRENGTH:
-                weakest = min(weakest, _STRENGTH[token.strip()])
-            depth += token.count("(") - token.count(")")
-    return ("(", *tokens, ")") if weakest < strength else tokens
-
-
-def _gathered(values: list[float], how: How) -> float:
-    array = np.array(values)
-    match how:
-        case "sum":
-            return float(array.sum())
-        case "product":
-            return float(array.prod())
-        case "least":
-            return float(array.min(initial=np.inf))
-        case "first":
-            reached = np.flatnonzero(array >= 0)
-            return float(reached[0]) / 12 if len(reached) else float("nan")
-    return float(array[0])
-
-
-def _named(node: f.Line | f.Given | f.Fact) -> tuple[Kind, str]:
-    match node:
-        case f.Line(key=key):
-            return "line", key
-        case f.Given(path=path):
-            return "input", path
-        case f.Fact(name=name):
-            return "fact", name
+    span_of_cells: Span = "date" if kernel.solves else "month"
+    operand = Operand("cells", declared.key, span_of_cells, None, total, "sum", cells)
+    return Working(
+        declared.key, span, at, value, declared, (Ref(1),), (operand,), solved=kernel.solves
+    )

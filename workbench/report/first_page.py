@@ -1,6 +1,7 @@
 """The memo's first page: the answer, the key figures beside the value wall, and who made it."""
 
 from dataclasses import dataclass, replace
+from math import inf
 
 from workbench.charts.lettering import shorten
 from workbench.charts.shapes import Picture
@@ -49,11 +50,12 @@ _SETTINGS = (
 
 def first_page(document: Document, read: Readings, voice: Voice) -> tuple[Section, ...]:
     """The sections of the first page, set as airily as the sheet of the document allows."""
-    for setting in _SETTINGS:
-        sections = _sections(document, read, voice, setting)
-        if len(lay_out(replace(document, sections=sections))) == 1:
-            break
-    return sections
+    choices = [_sections(document, read, voice, setting) for setting in _SETTINGS]
+    return next((some for some in choices if _fits(document, some)), choices[-1])
+
+
+def _fits(document: Document, sections: tuple[Section, ...]) -> bool:
+    return len(lay_out(replace(document, sections=sections))) == 1
 
 
 def _sections(
@@ -62,9 +64,8 @@ def _sections(
     left_room, right_room = sheet.columns(sheet.sheet_of(document.paper).column, _LEFT_SHARE)
     chosen = KeyFigures(key_figures(read, voice), setting.air)
     left: tuple[Block, ...] = (chosen, tier_table(read, voice))
-    tall = max(
-        stack_height(column_slabs(left, left_room, sheet.sheet_of("a4").height)), _LOWEST_WALL
-    )
+    beside = stack_height(column_slabs(left, left_room, inf))
+    tall = max(beside, _LOWEST_WALL)
     wall = Figure(wall_of(read, voice, right_room, tall))
     columns = (Column("", share=0.2), Column("", share=0.8))
     who = Table(columns, parties(voice.deal.about, voice.locale), most_lines=setting.lines)
