@@ -5,6 +5,7 @@ import importlib
 import os
 import sys
 from collections.abc import Sequence
+from io import StringIO, TextIOWrapper
 
 from workbench import __version__
 
@@ -30,6 +31,7 @@ def parser() -> argparse.ArgumentParser:
 def main(words: Sequence[str] | None = None) -> int:
     """Run one command; the exit status is 0 fine, 1 issues in the deal, 2 cannot be used."""
     os.environ.setdefault("OPENBLAS_NUM_THREADS", "1")
+    _prepare_streams()
     arguments = parser().parse_args(words)
     module = importlib.import_module(f"workbench.commands.{arguments.command}")
     from workbench.commands.terms import say_fault
@@ -39,12 +41,31 @@ def main(words: Sequence[str] | None = None) -> int:
         status = module.run(arguments)
         sys.stdout.flush()
         return int(status)
-    except BrokenPipeError:
-        # Whoever read the output has had enough; Python must not complain of it on the way out.
-        os.dup2(os.open(os.devnull, os.O_WRONLY), sys.stdout.fileno())
-        return 0
-    except (UnreadableError, OSError) as error:
+    except UnreadableError as error:
         return say_fault(arguments.deal, error)
+    except BrokenPipeError:  # whoever read the output has had enough
+        _let_go_of_output()
+        return 0
+    except OSError as error:
+        _let_go_of_output()
+        return say_fault(error.filename or "standard output", error)
+
+
+def _prepare_streams() -> None:
+    """No name or text can stop the output: UTF-8 where it is piped, signs for what lacks a code."""
+    for name in ("stdout", "stderr"):
+        stream: object = getattr(sys, name)
+        if stream is None:  # closed by whoever started the program
+            setattr(sys, name, StringIO())
+        elif isinstance(stream, TextIOWrapper):
+            stream.reconfigure(
+                encoding=None if stream.isatty() else "utf-8", errors="backslashreplace"
+            )
+
+
+def _let_go_of_output() -> None:
+    """Lead the output nowhere, so that Python does not fail on it again on the way out."""
+    os.dup2(os.open(os.devnull, os.O_WRONLY), sys.stdout.fileno())
 
 
 if __name__ == "__main__":

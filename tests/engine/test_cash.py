@@ -7,7 +7,7 @@ import numpy as np
 import numpy_financial
 import pytest
 import pyxirr
-from hypothesis import given
+from hypothesis import given, settings
 from hypothesis import strategies as st
 
 from workbench.engine import cash
@@ -43,6 +43,7 @@ def test_nothing_is_worth_nothing() -> None:
     assert npv(0.0, [-1.0, 1.0]) == 0.0
 
 
+@settings(deadline=None)
 @given(rates, st.lists(money, min_size=1, max_size=60), st.sampled_from([1.0, 1 / 12]))
 def test_present_value_to_the_last_digits(rate: float, flows: list[float], step: float) -> None:
     times = [step * k for k in range(len(flows))]
@@ -51,6 +52,7 @@ def test_present_value_to_the_last_digits(rate: float, flows: list[float], step:
     assert npv(rate, flows, times) == pytest.approx(value, rel=0, abs=4e-16 * (4 + reach) * size)
 
 
+@settings(deadline=None)
 @given(rates, st.lists(money, min_size=2, max_size=40))
 def test_present_value_as_pyxirr_has_it(rate: float, flows: list[float]) -> None:
     size = npv(rate, [abs(flow) for flow in flows])
@@ -113,6 +115,7 @@ def test_modified_rate_by_hand() -> None:
     assert mirr([-100, -50, 90, 95], 0.08, 0.05) == pytest.approx(expected, rel=1e-13)
 
 
+@settings(deadline=None)
 @given(
     st.lists(st.floats(1.0, 1e6), min_size=1, max_size=20),
     st.lists(st.floats(1.0, 1e6), min_size=1, max_size=20),

@@ -8,7 +8,7 @@ import numpy.typing as npt
 import numpy_financial
 import pytest
 import pyxirr
-from hypothesis import given
+from hypothesis import given, settings
 from hypothesis import strategies as st
 
 from workbench.engine.cash import irr
@@ -55,6 +55,7 @@ def test_payment_by_hand() -> None:
     assert payment(1000.0, -0.12, 2) == pytest.approx(1000 * 0.9801 / 1.99, rel=1e-14)
 
 
+@settings(deadline=None)
 @given(rates, st.integers(1, 480))
 def test_payment_to_the_last_digits(rate: float, months: int) -> None:
     with mpmath.workdps(40):
@@ -63,6 +64,7 @@ def test_payment_to_the_last_digits(rate: float, months: int) -> None:
     assert payment(1e6, rate, months) == pytest.approx(float(level), rel=2e-14)
 
 
+@settings(deadline=None)
 @given(st.floats(0.001, 0.6), st.integers(1, 480))
 def test_payment_as_the_libraries_have_it(rate: float, months: int) -> None:
     level = payment(250_000.0, rate, months)
@@ -130,6 +132,11 @@ def test_a_bullet_loan_bears_interest_alone() -> None:
     assert loan.balloon == 1e6
 
 
+def test_the_last_payment_clears_the_balance_to_the_last_digit() -> None:
+    for rate in np.linspace(0.0, 0.3, 61):
+        assert schedule(123_456.78, float(rate), 17).balloon == 0.0
+
+
 def test_nothing_is_due_after_the_last_payment() -> None:
     loan = schedule(1000.0, 0.05, 3, interest_only=1, term=6)
     assert (loan.payment[4:] == 0).all()
@@ -150,6 +157,7 @@ def test_a_rate_row_recasts_the_payment() -> None:
     assert loan.payment[12:] == pytest.approx(np.full(348, after), rel=1e-10)
 
 
+@settings(deadline=None)
 @given(
     st.floats(1.0, 1e9),
     st.lists(rates, min_size=1, max_size=90),
@@ -256,6 +264,7 @@ def test_a_prepaid_charge_raises_the_rate() -> None:
     assert charged > 0.06
 
 
+@settings(deadline=None)
 @given(
     st.floats(1.0, 1e6),
     st.lists(st.floats(0.0, 1e5), min_size=1, max_size=80).filter(lambda paid: max(paid) > 1.0),
@@ -267,6 +276,7 @@ def test_apr_is_the_periodic_internal_rate(advance: float, paid: list[float]) ->
     assert 1 + rate / 12 == pytest.approx(1 + periodic, rel=1e-11)
 
 
+@settings(deadline=None)
 @given(
     st.lists(st.floats(1.0, 100.0), min_size=1, max_size=40),
     st.floats(0.0, 0.99),

@@ -85,6 +85,7 @@ def test_the_header_of_a_table_is_repeated() -> None:
     pages = lay_out(document(Section("One", (table,))))
     assert len(pages) > 1
     assert all(said(page).count("How much") == 1 for page in pages)
+    assert all(collisions(page) == [] for page in pages)
     assert sum("row" in text for page in pages for text in said(page)) == 100
 
 

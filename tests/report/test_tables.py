@@ -5,8 +5,9 @@ from itertools import pairwise
 from workbench.charts.lettering import width
 from workbench.charts.shapes import Line, Text
 from workbench.report.document import Column, KeyFigure, KeyFigures, Table
+from workbench.report.key_figure_slabs import key_figure_slabs
 from workbench.report.slabs import Slab, piled, stack_height
-from workbench.report.tables import key_figure_slabs, table_slabs
+from workbench.report.tables import table_slabs
 
 COLUMNS = (Column("What", share=0.6), Column("Amount", "right", 0.4))
 

@@ -19,6 +19,8 @@ LIGHT: Palette = {
     "on_exit": "#171B1F",
     "price": "#9C2B1B",  # iron oxide
     "hatch": "#8A776B",
+    "income": "#84916F",  # lichen
+    "debt": "#2E4355",  # deep slate
 }
 
 DARK: Palette = {
@@ -33,6 +35,8 @@ DARK: Palette = {
     "on_exit": "#F4F1EA",
     "price": "#F0907F",
     "hatch": "#9A877B",
+    "income": "#6D795F",
+    "debt": "#BFD4E6",
 }
 
 PRINT: Palette = {**LIGHT, "paper": "#FFFFFF", "panel": "#F2EFE8"}

@@ -11,7 +11,7 @@ from workbench.charts.lettering import Weight
 
 Role: TypeAlias = Literal[
     "paper", "panel", "rule", "ink", "muted",
-    "in_hand", "expected", "exit", "on_exit", "price", "hatch",
+    "in_hand", "expected", "exit", "on_exit", "price", "hatch", "income", "debt",
 ]  # fmt: skip
 Anchor: TypeAlias = Literal["start", "middle", "end"]
 

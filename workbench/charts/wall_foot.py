@@ -1,14 +1,13 @@
 """What stands under the wall: which brick means what, and what has to be said about it."""
 
-from workbench.charts.lettering import LEADING, width
-from workbench.charts.masonry import Bond, Box, lay
+from workbench.charts.legend import Entry, legend
+from workbench.charts.lettering import LEADING
+from workbench.charts.masonry import Bond, lay
 from workbench.charts.shapes import Shape, Text
 from workbench.charts.wall_stack import Stack, Tier, WallFigures
 from workbench.charts.wrapping import wrap
 
-_SWATCH = 3.2
-"""Width of a swatch as a multiple of the letter size."""
-_TIER_NAMES: dict[Tier, str] = {"in_hand": "rent in hand", "expected": "rent expected"}
+TIER_NAMES: dict[Tier, str] = {"in_hand": "rent in hand", "expected": "rent expected"}
 
 
 def bond_of(tier: Tier, size: float, wall: float) -> Bond:
@@ -73,20 +72,12 @@ def foot(
 
 
 def _legend(stack: Stack, size: float, wide: float) -> tuple[list[Shape], float]:
-    """A swatch and a name for each tier that occurs, on one line or one under the other."""
+    """A swatch and a name for each tier that occurs."""
     seen = {piece.tier for course in stack.courses for piece in course.pieces}
-    tiers = [tier for tier in _TIER_NAMES if tier in seen]
-    small = size * 0.92
-    lengths = [size * (_SWATCH + 0.6) + width(_TIER_NAMES[tier], small) for tier in tiers]
-    one_line = sum(lengths) + 1.5 * size * len(lengths) <= wide
-    shapes: list[Shape] = []
-    right, down = 4.0, 0.0
-    for tier, length in zip(tiers, lengths, strict=True):
-        if down == 0.0 or not one_line:
-            right, down = 4.0, down + size * 1.5
-        swatch = Box(right, down - size * 0.75, size * _SWATCH, size * 0.8)
-        shapes += lay(swatch, 1, bond_of(tier, size, wide), right)
-        name = _TIER_NAMES[tier]
-        shapes.append(Text(right + size * (_SWATCH + 0.6), down, name, small, colour="muted"))
-        right += length + 1.5 * size
-    return shapes, down + size * 0.3 if shapes else 0.0
+    return legend([tier_entry(tier, size, wide) for tier in TIER_NAMES if tier in seen], size, wide)
+
+
+def tier_entry(tier: Tier, size: float, wide: float) -> Entry:
+    """A tier of rent with a sample of its masonry."""
+    bond = bond_of(tier, size, wide)
+    return Entry(TIER_NAMES[tier], lambda box: lay(box, 1, bond, box.x))

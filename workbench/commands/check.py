@@ -2,7 +2,7 @@
 
 import argparse
 
-from workbench.commands.terms import FINE, add_deal, open_deal, say_issues
+from workbench.commands.terms import FINE, add_deal, open_deal, say_issues, shown_name
 
 SUMMARY = "say what is wrong in a deal, if anything"
 
@@ -14,5 +14,5 @@ def add_arguments(parser: argparse.ArgumentParser) -> None:
 def run(arguments: argparse.Namespace) -> int:
     status = say_issues(open_deal(arguments))
     if status == FINE:
-        print(f"{arguments.deal}: no issues found")
+        print(f"{shown_name(arguments.deal)}: no issues found")
     return status

@@ -2,11 +2,13 @@
 
 import argparse
 import sys
+from contextlib import suppress
 from dataclasses import replace
 from pathlib import Path
 
-from workbench.commands.terms import add_deal, open_deal, say_issues
+from workbench.commands.terms import add_deal, open_deal, say_fault, say_issues, shown_name
 from workbench.files.atomic import write_atomically
+from workbench.files.faults import Fault, UnreadableError
 from workbench.report.memo import build
 from workbench.report.record import record_of
 from workbench.text.locale import DEFAULT, find_locale
@@ -24,15 +26,27 @@ def run(arguments: argparse.Namespace) -> int:
     from workbench.report.pdf import draw
 
     deal = open_deal(arguments)
+    if _same_file(arguments.deal, arguments.out):
+        fault = Fault("", "this is the deal file; name another file for the memo")
+        return say_fault(arguments.out, UnreadableError(fault))
     document = build(deal, record_of(deal), find_locale(deal.conventions.locale) or DEFAULT)
     if arguments.paper:
         document = replace(document, paper=arguments.paper)
     drawn = draw(document)
-    write_atomically(arguments.out, drawn.pdf)
+    try:
+        write_atomically(arguments.out, drawn.pdf)
+    except OSError as error:
+        return say_fault(arguments.out, error)
     if drawn.lacking:
         marks = " ".join(drawn.lacking)
         print(
-            f"{arguments.deal}: printed as a mark, since the font lacks them: {marks}",
+            f"{shown_name(arguments.deal)}: printed as a mark, since the font lacks them: {marks}",
             file=sys.stderr,
         )
     return say_issues(deal)
+
+
+def _same_file(deal: Path, out: Path) -> bool:
+    with suppress(OSError):
+        return out.samefile(deal)
+    return False

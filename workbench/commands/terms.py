@@ -8,7 +8,8 @@ from workbench.deal.checks import check
 from workbench.deal.deal import Deal
 from workbench.files.deal_file import read_deal
 from workbench.files.entries import with_entries
-from workbench.files.faults import Fault, UnreadableError
+from workbench.files.faults import UnreadableError, system_fault
+from workbench.text.excerpt import excerpt
 from workbench.text.messages import word_issue
 
 FINE, ISSUES, UNUSABLE = 0, 1, 2
@@ -42,12 +43,12 @@ def say_issues(deal: Deal) -> int:
 
 def say_fault(name: object, error: UnreadableError | OSError) -> int:
     """What went wrong with a file, on stderr."""
-    faults = error.faults if isinstance(error, UnreadableError) else (_from_system(error),)
+    faults = error.faults if isinstance(error, UnreadableError) else (system_fault(error),)
     for fault in faults:
-        print(f"{name}: {fault}", file=sys.stderr)
+        print(f"{shown_name(name)}: {fault}", file=sys.stderr)
     return UNUSABLE
 
 
-def _from_system(error: OSError) -> Fault:
-    reason = error.strerror or "it cannot be used"
-    return Fault("", f"{reason[0].lower()}{reason[1:]}")
+def shown_name(name: object) -> str:
+    """A file's name as a line can hold it."""
+    return excerpt(str(name), 200)

@@ -4,7 +4,6 @@ import datetime
 from collections.abc import Iterator
 from itertools import pairwise
 
-from workbench.deal.deal import Deal
 from workbench.deal.earn import Lease, Rent, Space, Step
 from workbench.deal.issues import Issue
 
@@ -14,17 +13,15 @@ def is_dated(lease: Lease) -> bool:
     return lease.start is not None and lease.end is not None
 
 
-def check_spaces(deal: Deal) -> Iterator[Issue]:
-    if not deal.spaces:
-        yield Issue("spaces", "no_spaces")
-    for space in deal.spaces:
-        yield from _check_rent(space, f"spaces@{space.id}.market_rent", space.market_rent)
-        for lease in space.leases:
-            yield from _check_lease(space, lease)
-        yield from _check_order(space)
-        undated = [lease for lease in space.leases if not is_dated(lease)]
-        if undated and len(space.leases) > 1:
-            yield Issue(f"leases@{undated[0].id}.start", "undated_beside_others")
+def check_space(space: Space) -> Iterator[Issue]:
+    """What does not fit together within one space; nothing outside it matters."""
+    yield from _check_rent(space, f"spaces@{space.id}.market_rent", space.market_rent)
+    for lease in space.leases:
+        yield from _check_lease(space, lease)
+    yield from _check_order(space)
+    undated = [lease for lease in space.leases if not is_dated(lease)]
+    if undated and len(space.leases) > 1:
+        yield Issue(f"leases@{undated[0].id}.start", "undated_beside_others")
 
 
 def _check_rent(space: Space, path: str, rent: Rent) -> Iterator[Issue]:

@@ -21,7 +21,6 @@ PICTURES = 24
 def check_records(deal: Deal) -> Iterator[Issue]:
     if not re.fullmatch("[A-Z]{3}", deal.conventions.currency):
         yield Issue("conventions.currency", "bad_currency", deal.conventions.currency)
-    yield from _check_ids(deal)
     yield from _check_references(deal)
     for statement in deal.statements:
         if statement.start and statement.end and statement.end < statement.start:
@@ -33,7 +32,6 @@ def check_records(deal: Deal) -> Iterator[Issue]:
         for path in named:
             if not _exists(deal, path):
                 yield Issue(f"cases@{case.id}", "path_lost", path, other={"case": case.name})
-    yield from _check_pictures(deal)
     for path, text in deal.drafts.items():
         yield Issue(path, "draft", text)
 
@@ -49,11 +47,17 @@ def items(record: Any) -> Iterator[tuple[str, Any]]:
                 yield from items(item)
 
 
-def _check_ids(deal: Deal) -> Iterator[Issue]:
-    ahead = [item.id for _, item in items(deal) if int(item.id[1:]) >= deal.next_id]
-    for identity in ahead[:1]:
-        least = max(int(one[1:]) for one in ahead) + 1
-        yield Issue("next_id", "id_ahead", deal.next_id, least, None, {"id": identity})
+def highest_id(record: Any) -> tuple[int, str]:
+    """The highest number among the ids below a record, with its id; 0 where there is none."""
+    found = ((int(item.id[1:]), str(item.id)) for _, item in items(record))
+    return max(found, default=(0, ""))
+
+
+def check_ids(next_id: int, highest: tuple[int, str]) -> Iterator[Issue]:
+    """Whether the next id lies above all others."""
+    number, identity = highest
+    if number >= next_id:
+        yield Issue("next_id", "id_ahead", next_id, number + 1, other={"id": identity})
 
 
 def misnamed(deal: Deal) -> Iterator[tuple[str, str]]:
@@ -69,10 +73,15 @@ def misnamed(deal: Deal) -> Iterator[tuple[str, str]]:
 
 
 def _check_references(deal: Deal) -> Iterator[Issue]:
-    dated = {lease.id for space in deal.spaces for lease in space.leases if is_dated(lease)}
-    for item in deal.other_income:
-        if item.lease is not None and item.lease not in dated:
+    tied = [item for item in deal.other_income if item.lease is not None]
+    leases = (lease for space in deal.spaces for lease in space.leases) if tied else ()
+    dated = {lease.id for lease in leases if is_dated(lease)}
+    for item in tied:
+        if item.lease not in dated:
             yield Issue(f"other_income@{item.id}.lease", "no_such_lease", item.lease)
+    for digest in deal.property.pictures:
+        if digest not in deal.pictures:
+            yield Issue("property.pictures", "picture_lost", digest)
 
 
 def _exists(deal: Deal, path: str) -> bool:
@@ -86,15 +95,12 @@ def _exists(deal: Deal, path: str) -> bool:
     return True
 
 
-def _check_pictures(deal: Deal) -> Iterator[Issue]:
+def check_pictures(deal: Deal) -> Iterator[Issue]:
     if len(deal.pictures) > PICTURES:
         yield Issue("pictures", "too_many", len(deal.pictures), 0, PICTURES)
     for digest, text in deal.pictures.items():
         if not _is_picture(digest, text):
             yield Issue(f"pictures.{digest[:12]}", "not_the_picture", digest)
-    for digest in deal.property.pictures:
-        if digest not in deal.pictures:
-            yield Issue("property.pictures", "picture_lost", digest)
 
 
 def _is_picture(digest: str, text: str) -> bool:

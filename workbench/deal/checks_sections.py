@@ -38,15 +38,15 @@ def check_sections(deal: Deal) -> Iterator[Issue]:
 
 def _check_areas(deal: Deal) -> Iterator[Issue]:
     """Whatever is priced by area needs the area of every space."""
-    if not any(space.area is None for space in deal.spaces):
-        return
     users = [f"expenses@{item.id}.basis" for item in deal.expenses if item.basis == "area"]
     users += [f"other_income@{item.id}.basis" for item in deal.other_income if item.basis == "area"]
     if deal.spend.reserves_basis == "area" and deal.spend.reserves:
         users.append("spend.reserves_basis")
     if "price_per" in exit_methods(deal) and deal.leave.price_per_of == "area":
         users.append("leave.price_per_of")
-    without = next(space.id for space in deal.spaces if space.area is None)
+    without = next((space.id for space in deal.spaces if space.area is None), None)
+    if not users or without is None:
+        return
     for path in users:
         yield Issue(path, "areas_needed", "area", other={"space": without})
 

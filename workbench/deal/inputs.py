@@ -45,6 +45,12 @@ class Field:
     def is_row(self) -> bool:
         return self.kind == YearRow or YearRow in get_args(self.kind)
 
+    @property
+    def records(self) -> tuple[type, ...]:
+        """The record classes that the field holds, by itself or in a list."""
+        kinds = (self.kind, *get_args(self.kind))
+        return tuple(one for one in kinds if isinstance(one, type) and is_dataclass(one))
+
 
 _DECLARED: dict[type, Mapping[str, Field]] = {}
 

@@ -6,9 +6,10 @@ year row may be named whole (`earn.vacancy`) or year by year (`earn.vacancy.3`).
 
 import re
 from collections.abc import Mapping
-from dataclasses import fields, is_dataclass, replace
+from dataclasses import is_dataclass, replace
 from typing import Any, TypeAlias
 
+from workbench.deal.deal import ID_LETTERS
 from workbench.deal.inputs import Field, declared
 
 Step: TypeAlias = str | int
@@ -53,29 +54,37 @@ def locate(deal: Any, path: str) -> tuple[Step, ...]:
 def find_item(deal: Any, name: str) -> tuple[Step, ...]:
     """The steps to the item `list@id`. Raises UnknownPathError."""
     list_name, _, identity = name.partition("@")
-    found = _search(deal, list_name, identity)
+    found = _search(deal, list_name, identity) if list_name in ID_LETTERS else None
     if found is None:
         raise UnknownPathError(name, name)
     return found
 
 
 def _search(record: Any, list_name: str, identity: str) -> tuple[Step, ...] | None:
-    for spec in fields(record):
-        value = getattr(record, spec.name)
+    for name, field in declared(type(record)).items():
+        if name != list_name and not _may_hold(field, list_name):
+            continue
+        value = getattr(record, name)
         if is_dataclass(value):
             inner = _search(value, list_name, identity)
             if inner is not None:
-                return (spec.name, *inner)
+                return (name, *inner)
         for position, item in enumerate(value if isinstance(value, tuple) else ()):
-            if not is_dataclass(item):
-                break
-            here: tuple[Step, ...] = (spec.name, position)
-            if spec.name == list_name and getattr(item, "id", None) == identity:
-                return here
+            if name == list_name and item.id == identity:
+                return (name, position)
             below = _search(item, list_name, identity)
             if below is not None:
-                return here + below
+                return (name, position, *below)
     return None
+
+
+def _may_hold(field: Field, list_name: str) -> bool:
+    """Whether a list of that name can lie below a field, by the classes alone."""
+    return any(
+        name == list_name or _may_hold(below, list_name)
+        for record in field.records
+        for name, below in declared(record).items()
+    )
 
 
 def value_at(record: Any, steps: tuple[Step, ...]) -> Any:

@@ -17,6 +17,7 @@ LOWEST = float(np.log(1e-12))  # continuous rate of −99.9999999999 % a year
 HIGHEST = float(np.log(1e300))
 CLOSE = 4e-8  # a last step this small, times the span, leaves an error near its square
 STEPS = 24
+DEEP = 600.0  # exponents at which discounted flows get near the smallest double
 
 
 def even_step(times: Array) -> float | None:
@@ -65,9 +66,9 @@ def _certified(flows: Array, times: Array, step: float | None, start: float | No
     rates = _roots(flows, lead, times, step, start)
     # What is still to come, seen from each date, is the running balance with its sign turned. One
     # change of sign needs no test of its own: what is still to come then never changes sign. Where
-    # rounding hides that, the row is searched like any other.
+    # rounding hides that, or a late flow could vanish, the row is searched like any other.
     least, most = range_ahead(flows, times, step, rates)
-    pure = np.where(opening < 0, least >= 0, most <= 0)
+    pure = np.where(opening < 0, least >= 0, most <= 0) & (np.abs(rates) * times[-1] < DEEP)
     return np.where(pure & np.logical_or.reduce(against), rates, np.nan)
 
 

@@ -36,7 +36,8 @@ def _month_starts(months: Floats) -> Floats:
 
 
 def _over_dates(dates: Floats) -> Floats:
-    summed: Floats = dates.sum(axis=0)
+    """Summed in the order of a running sum, so that no rounding parts the two."""
+    summed: Floats = np.add.accumulate(dates)[-1]
     return summed
 
 
@@ -60,12 +61,6 @@ def wide(figure: Floats | float, count: int) -> Floats:
     return np.broadcast_to(cells, (count, len(cells))) if count else cells
 
 
-def _like(first: Floats | float, row: Floats) -> Floats:
-    """A single figure as the row's first cell."""
-    cell = np.asarray(first, dtype=np.float64).reshape(1, -1)
-    return np.broadcast_to(cell, (1, max(cell.shape[1], row.shape[1])))
-
-
 def before(row: Floats, first: Floats | float) -> Floats:
     """The cell before; the first cell has `first`."""
     return on_dates(row[:-1], first)
@@ -73,21 +68,24 @@ def before(row: Floats, first: Floats | float) -> Floats:
 
 def on_dates(months: Floats, first: Floats | float) -> Floats:
     """`first` at closing, then each month's figure at its end."""
-    cell = _like(first, months)
-    if cell.shape[1] != months.shape[1]:
-        months = np.broadcast_to(months, (len(months), cell.shape[1]))
-    return np.concatenate([cell, months])
+    trials = months.shape[1] if isinstance(first, float) else max(len(first), months.shape[1])
+    out = np.empty((len(months) + 1, trials))
+    out[0] = first
+    out[1:] = months
+    return out
 
 
 def at_year(row: Floats, year: Floats | float) -> Floats:
     """The cell of a year, 1 the first; not a number where the year is not one of the row."""
-    years = np.atleast_1d(np.asarray(year, dtype=np.float64))
-    valid = (years >= 1) & (years <= len(row))
-    position = np.where(valid, years, 1).astype(np.int64) - 1
-    if len(years) == 1:
-        return row[position[0]] if valid[0] else np.full(row.shape[1], np.nan)
-    wide = np.broadcast_to(row, (len(row), len(years)))
-    cells: Floats = np.take_along_axis(wide, position[np.newaxis], axis=0)[0]
+    if isinstance(year, float):
+        return row[int(year) - 1]
+    if len(year) == 1:
+        one = float(year[0])
+        return row[int(one) - 1] if 1 <= one <= len(row) else np.full(row.shape[1], np.nan)
+    valid = (year >= 1) & (year <= len(row))
+    position = np.where(valid, year, 1).astype(np.int64) - 1
+    wide_row = np.broadcast_to(row, (len(row), len(year)))
+    cells: Floats = np.take_along_axis(wide_row, position[np.newaxis], axis=0)[0]
     return np.where(valid, cells, np.nan)
 
 

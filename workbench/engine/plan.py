@@ -1,30 +1,21 @@
 """Compiling a deal: its shape's program, its inputs as rows, and the facts of roll and works."""
 
-import datetime
 import math
-from collections.abc import Callable, Iterator, Mapping
+from collections.abc import Mapping
 from dataclasses import dataclass
 from itertools import pairwise
 
 import numpy as np
 
-from workbench.deal.checks import check, faulty
-from workbench.deal.checks_leases import is_dated
+from workbench.deal.checks import Checked, check_parts, faulty
 from workbench.deal.deal import Deal
 from workbench.deal.inputs import YEARS, YearRow, declared
 from workbench.deal.issues import Issue
-from workbench.deal.paths import locate, value_at
-from workbench.deal.spend import Works
-from workbench.engine.calendar import MONTHS, month_starts, position
+from workbench.deal.paths import Step, locate, value_at
+from workbench.engine.facts import Facts, blocked_facts, facts_of
 from workbench.engine.printer import Program, program
 from workbench.engine.roll import (
-    KINDS,
     Floats,
-    lease_positions,
-    monthly,
-    pieces,
-    scatter,
-    share_of_months,
 )
 from workbench.engine.shape import Shape, shape_of
 
@@ -59,27 +50,68 @@ class Plan:
     facts: Mapping[str, Floats]
     issues: tuple[Issue, ...]
     blocked: Mapping[str, Issue]
+    parts: "Parts"
 
 
-def compile_deal(deal: Deal) -> Plan:
-    """The plan of a deal. Any deal that was read whole compiles, whatever its issues."""
+@dataclass(frozen=True, eq=False)
+class Parts:
+    """What a plan was made of, for the plan after the next edit to take over."""
+
+    checked: Checked
+    facts: Facts
+    places: Mapping[str, tuple[Step, ...]]
+    """Where each input lies in a deal of this shape."""
+
+
+def compile_deal(deal: Deal, earlier: Plan | None = None) -> Plan:
+    """The plan of a deal. Any deal that was read whole compiles, whatever its issues.
+
+    Parameters
+    ----------
+    deal : Deal
+    earlier : Plan, optional
+        The plan before an edit. What both deals share as the same objects is not looked at again,
+        so that an edit costs what it changed; the plan comes out the same without it.
+
+    Returns
+    -------
+    Plan
+
+    Examples
+    --------
+    >>> compile_deal(Deal()).blocked["purchase.price"].code
+    'missing'
+    """
     shape = shape_of(deal)
     made = program(shape)
-    issues = tuple(check(deal))
+    before = earlier.parts if earlier is not None else None
+    checked = check_parts(deal, before.checked if before is not None else None)
+    issues = checked.issues
     wrong = faulty([one for one in issues if one.code not in HARMLESS])
     blocked: dict[str, Issue] = {}
-    for name, issue in _blocked_facts(deal, wrong):
+    for name, issue in blocked_facts(deal, wrong):
         blocked.setdefault(name, issue)
-    facts = _facts(deal, blocked)
-    inputs = {path: _given(deal, path, wrong, blocked) for path in made.givens}
-    return Plan(deal, shape, made, inputs, facts, issues, blocked)
+    facts = facts_of(deal, frozenset(blocked), before.facts if before is not None else None)
+    if earlier is not None and before is not None and earlier.shape == shape:
+        places = before.places
+    else:
+        places = {path: locate(deal, path) for path in made.givens}
+    inputs = {path: _given(deal, path, places[path], wrong, blocked) for path in made.givens}
+    parts = Parts(checked, facts, places)
+    return Plan(deal, shape, made, inputs, facts.values, issues, blocked, parts)
 
 
-def _given(deal: Deal, path: str, wrong: Mapping[str, Issue], blocked: dict[str, Issue]) -> Floats:
-    steps = locate(deal, path)
-    value = value_at(deal, steps)
+def _given(
+    deal: Deal,
+    path: str,
+    steps: tuple[Step, ...],
+    wrong: Mapping[str, Issue],
+    blocked: dict[str, Issue],
+) -> Floats:
     owner = value_at(deal, steps[:-1])
-    if declared(type(owner))[str(steps[-1])].is_row:
+    name = str(steps[-1])
+    value = getattr(owner, name)
+    if declared(type(owner))[name].is_row:
         bad = {year for year in value or {} if f"{path}.{year}" in wrong}
         named = (wrong.get(f"{path}.{year}") for year in sorted(bad | {1}))
         issue = next((one for one in named if one is not None), None)
@@ -99,120 +131,3 @@ def expand(row: YearRow, bad: set[int] | frozenset[int] = frozenset()) -> Floats
     for year, following in pairwise([*years, YEARS + 1]):
         out[year - 1 : following - 1] = math.nan if year in bad else row[year]
     return out
-
-
-def _blocked_facts(deal: Deal, wrong: Mapping[str, Issue]) -> Iterator[tuple[str, Issue]]:
-    """Which facts cannot be made, and the first issue that stands in the way."""
-    for path, issue in wrong.items():
-        head, _, item = path.partition(".")[0].partition("@")
-        names: tuple[str, ...] = ()
-        if head == "spaces":
-            names = _space_facts(deal, item, path.partition(".")[2])
-        elif head in ("leases", "steps"):
-            names = (*KINDS, *(f"tied@{one.id}" for one in deal.other_income if one.lease == item))
-        elif head == "works":
-            names = _WORKS
-        elif path == "purchase.closing_date":
-            names = _dated_facts(deal)
-        elif issue.code == "areas_needed":
-            names = ("area",)
-        elif issue.code == "no_such_lease":
-            names = (f"tied@{item}",)
-        yield from ((name, issue) for name in names)
-
-
-def _space_facts(deal: Deal, item: str, field: str) -> tuple[str, ...]:
-    """What hangs on a field of a space; an area counts for rents given by area alone."""
-    if field == "area":
-        space = next(one for one in deal.spaces if one.id == item)
-        rents = (space.market_rent, *(lease.rent for lease in space.leases))
-        by_area = any(rent.of == "area" for rent in rents)
-        return (*KINDS, "market_total", "area") if by_area else ("area",)
-    return (*KINDS, *_COUNTED) if field in ("", "count") else (*KINDS, "market_total")
-
-
-def _dated_facts(deal: Deal) -> tuple[str, ...]:
-    """What hangs on the closing date in this deal."""
-    leases = any(is_dated(lease) for space in deal.spaces for lease in space.leases)
-    works = any(one.date is not None for one in deal.works)
-    tied = (f"tied@{one.id}" for one in deal.other_income if one.lease is not None)
-    return (*(KINDS if leases else ()), *(_WORKS if works else ()), *tied)
-
-
-def _facts(deal: Deal, blocked: Mapping[str, Issue]) -> dict[str, Floats]:
-    """Everything the lines read that is not an input; not a number where an issue blocks it.
-
-    What is blocked is not computed at all: a faulty date may lie beyond any calendar.
-    """
-    facts = dict(CALENDAR)
-    if not blocked.keys() & KINDS:
-        facts |= scatter(pieces(deal.spaces, deal.purchase.closing_date))
-    facts |= {name: _once(of(deal)) for name, of in _COUNTED.items() if name not in blocked}
-    if not blocked.keys() & _WORKS:
-        facts |= _works_facts(deal)
-    facts |= _tied(deal, blocked)
-    for name in blocked:
-        facts[name] = _once(math.nan) if name in _COUNTED else np.full((MONTHS, 1), math.nan)
-    return facts
-
-
-def _market_total(deal: Deal) -> float:
-    return math.fsum(monthly(space, space.market_rent) for space in deal.spaces)
-
-
-def _units(deal: Deal) -> float:
-    return math.fsum(space.count or math.nan for space in deal.spaces)
-
-
-def _area(deal: Deal) -> float:
-    return math.fsum((space.count or math.nan) * (space.area or math.nan) for space in deal.spaces)
-
-
-_COUNTED: Mapping[str, Callable[[Deal], float]] = {
-    "market_total": _market_total,
-    "units": _units,
-    "area": _area,
-}
-_WORKS = ("works", "works_today")
-
-
-def _works_facts(deal: Deal) -> dict[str, Floats]:
-    facts = {name: np.zeros((MONTHS, 1)) for name in _WORKS}
-    for works in deal.works:
-        month = _month_of(works, deal.purchase.closing_date)
-        if month is not None and month < MONTHS:
-            name = "works_today" if works.todays_money else "works"
-            facts[name][month] += math.nan if works.amount is None else works.amount
-    return facts
-
-
-def _month_of(works: Works, closing: datetime.date | None) -> int | None:
-    if works.date is not None and closing is not None:
-        return int(position(month_starts(closing), works.date))
-    return None if works.year is None else 12 * (works.year - 1) + works.month - 1
-
-
-def _tied(deal: Deal, blocked: Mapping[str, Issue]) -> dict[str, Floats]:
-    """For each income tied to a lease, the share of each month's days under it."""
-    closing = deal.purchase.closing_date
-    leases = {lease.id: lease for space in deal.spaces for lease in space.leases}
-    facts = {}
-    for one in deal.other_income:
-        lease = leases.get(one.lease or "")
-        if one.lease is not None and f"tied@{one.id}" not in blocked:
-            facts[f"tied@{one.id}"] = np.zeros((MONTHS, 1))
-            if lease is not None and is_dated(lease) and closing is not None:
-                span = lease_positions(lease, month_starts(closing))
-                facts[f"tied@{one.id}"] = share_of_months(*span)
-    return facts
-
-
-def _once(figure: float) -> Floats:
-    return np.array([figure])
-
-
-CALENDAR: Mapping[str, Floats] = {
-    "month_number": np.arange(1.0, MONTHS + 1)[:, np.newaxis],
-    "month_of_year": np.tile(np.arange(1.0, 13), YEARS)[:, np.newaxis],
-    "date_years": (np.arange(MONTHS + 1) / 12)[:, np.newaxis],
-}

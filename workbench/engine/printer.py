@@ -4,6 +4,7 @@ Inside it the rows come first and the trials last: months (492, trials or 1), ye
 (493, …) and single figures (trials or 1,).
 """
 
+import re
 from collections.abc import Callable, Iterable, Mapping
 from dataclasses import dataclass, field
 from functools import lru_cache
@@ -33,9 +34,10 @@ _COMPARISONS = {"<": "<", "≤": "<=", "=": "==", ">": ">"}
 
 @dataclass(frozen=True)
 class Program:
-    """The lines of a shape in the order of computing, and the function that computes them.
+    """The lines that the function returns, and the function that computes them.
 
-    `givens` are the paths of all inputs that the lines read.
+    `givens` are the paths of all inputs that it reads. A program of wanted lines keeps only those,
+    and lets go of everything in between as soon as it has been used.
     """
 
     lines: Mapping[str, Declared]
@@ -52,8 +54,9 @@ def program(shape: Shape, wanted: frozenset[str] | None = None) -> Program:
     leaves = [leaf for line in order for leaf in formulas_below(line)]
     givens = dict.fromkeys(leaf.path for leaf in leaves if isinstance(leaf, f.Given))
     facts = dict.fromkeys(leaf.name for leaf in leaves if isinstance(leaf, f.Fact))
-    source = _Writer().function(order, givens, facts)
-    return Program({line.key: line for line in order}, tuple(givens), source, _load(source))
+    kept = [line for line in order if wanted is None or line.key in wanted]
+    source = _Writer(conditions=wanted is None).function(order, kept, givens, facts)
+    return Program({line.key: line for line in kept}, tuple(givens), source, _load(source))
 
 
 def formulas_of(line: Declared) -> list[f.Formula]:
@@ -98,35 +101,44 @@ def condition_key(key: str, position: int) -> str:
 class _Writer:
     """Collects the statements of the function; a formula met twice is computed once."""
 
+    conditions: bool
+    """Whether the function also returns which conditions are met."""
     statements: list[str] = field(default_factory=list)
     names: dict[f.Formula, str] = field(default_factory=dict)
     kernels: dict[tuple[str, tuple[f.Formula, ...]], str] = field(default_factory=dict)
     rows: dict[str, Per] = field(default_factory=dict)
+    met: dict[str, str] = field(default_factory=dict)
 
-    def function(self, order: list[Declared], givens: Iterable[str], facts: Iterable[str]) -> str:
+    def function(
+        self,
+        order: list[Declared],
+        kept: list[Declared],
+        givens: Iterable[str],
+        facts: Iterable[str],
+    ) -> str:
         for path in givens:
             self.names[f.Given(path)] = self._assign(f"givens[{path!r}]")
         for name in facts:
             self.names[f.Fact(name)] = self._assign(f"facts[{name!r}]")
-        results = []
         for line in order:
-            results += self._line(line)
-        body = "\n    ".join([*self.statements, "return {", *results, "}"])
+            self._line(line)
+        results = {line.key: self.names[f.Line(line.key)] for line in kept}
+        results |= self.met if self.conditions else {}
+        last = "return {" + ", ".join(f"{key!r}: {name}" for key, name in results.items()) + "}"
+        body = "\n    ".join(_let_go([*self.statements, last]))
         return f"def run(givens, facts):\n    {body}\n"
 
-    def _line(self, line: Declared) -> list[str]:
+    def _line(self, line: Declared) -> None:
         if isinstance(line.body, Output):
             name = f"{self._kernel(line.body)}[{line.body.name!r}]"
         else:
             name = self._body(line.body, line.per)
-        held = []
         for position, (condition, _) in enumerate(line.unless):
             met = self._name(condition)
-            held.append(f"    {condition_key(line.key, position)!r}: {met},")
+            self.met[condition_key(line.key, position)] = met
             name = f"where({met}, nan, {name})"
         self.names[f.Line(line.key)] = self._assign(name)
         self.rows[line.key] = line.per
-        return [*held, f"    {line.key!r}: {self.names[f.Line(line.key)]},"]
 
     def _body(self, body: f.Formula, per: Per) -> str:
         """A body as a row of its line: a single figure stands in each cell."""
@@ -176,6 +188,20 @@ class _Writer:
                 return f"looks[{along!r}]({parts[0]})"
             case _:
                 return f"{_NODES[type(node)].__name__}({', '.join(parts)})"
+
+
+def _let_go(statements: list[str]) -> list[str]:
+    """The statements with each variable deleted after its last use, so that memory stays warm."""
+    written: list[str] = []
+    seen: set[str] = set()
+    for text in reversed(statements):
+        used = dict.fromkeys(re.findall(r"\bv\d+\b", text))
+        done = [name for name in used if name not in seen and not text.startswith("return")]
+        seen |= used.keys()
+        if done and not text.startswith(f"{done[0]} = "):
+            written.append(f"del {', '.join(done)}")
+        written.append(text)
+    return written[::-1]
 
 
 _NODES: Mapping[type[f.Formula], Callable[..., Floats]] = {

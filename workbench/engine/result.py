@@ -13,10 +13,10 @@ from workbench.engine import formula as f
 from workbench.engine.kernels import KERNELS
 from workbench.engine.lines import Declared, Output
 from workbench.engine.plan import Plan
-from workbench.engine.printer import condition_key, formulas_of, program
+from workbench.engine.printer import condition_key, formulas_below, formulas_of, program
 from workbench.engine.roll import Floats
 
-CHUNK = 400
+CHUNK = 256
 """Trials computed at a time, so that the arrays at work stay in the processor's cache."""
 
 
@@ -46,7 +46,7 @@ def evaluate(
         the plan's lines read can be driven; what changes the rent roll or the shape of the deal
         needs a plan of its own.
     wanted : collection of line keys, optional
-        Compute only these and what they need.
+        Compute only these and what they need, and keep only these.
 
     Returns
     -------
@@ -57,7 +57,8 @@ def evaluate(
     KeyError
         A driver's path is not an input of this plan.
     ValueError
-        Drivers of different numbers of trials, or not of two axes.
+        Drivers of different numbers of trials, not of two axes or empty, or with years for a
+        single figure.
 
     Examples
     --------
@@ -77,17 +78,21 @@ def evaluate(
         chunk = {path: _slice(values, start) for path, values in driven.items()}
         with np.errstate(all="ignore"):
             parts.append(made.run({**plan.inputs, **chunk}, plan.facts))
-    return Result(plan, trials, made.lines, _joined(parts, trials))
+    values = _joined(parts, trials)
+    whole = wanted is None
+    return Result(plan, trials, made.lines, values, {**plan.inputs, **driven}, driven, whole)
 
 
 def _driver(plan: Plan, path: str, values: npt.ArrayLike) -> Floats:
     """A driver as the program wants it: years first for a row, one axis for a single figure."""
     table = np.asarray(values, dtype=np.float64)
-    if table.ndim != 2:
+    if table.ndim != 2 or not table.size:
         raise ValueError(f"{path}: a driver has the axes trials and years")
     if path not in plan.inputs:
         raise KeyError(path)
     if plan.inputs[path].ndim == 1:
+        if table.shape[1] != 1:
+            raise ValueError(f"{path}: a single figure has no years")
         return table[:, 0]
     years = np.minimum(np.arange(YEARS), table.shape[1] - 1)
     return np.ascontiguousarray(table.T[years])
@@ -118,6 +123,11 @@ class Result:
     declared: Mapping[str, Declared]
     values: Mapping[str, Floats] = field(repr=False)
     """Rows first, trials last, as the program made them; 1 trial where nothing drives a line."""
+    inputs: Mapping[str, Floats] = field(repr=False)
+    """What the lines read: the plan's inputs, with the drivers in place of some."""
+    driven: Mapping[str, Floats] = field(repr=False)
+    whole: bool
+    """Whether all lines are kept, and not only those that were wanted."""
 
     def line(self, key: str) -> Floats:
         """A line's array: (1 or trials, months, years or dates), or (1 or trials, 1)."""
@@ -145,9 +155,9 @@ class Result:
         cell = row[trial if len(row) > 1 else 0, 12 * year - 1]
         return float(cell) if math.isfinite(cell) else None
 
-    def given(self, path: str) -> float | None:
+    def given(self, path: str, trial: int = 0) -> float | None:
         """An input as the lines read it; None where it is missing or out of range."""
-        cell = float(self.plan.inputs[path][0])
+        cell = float(self._cells(self.inputs[path], None, trial).flat[0])
         return cell if math.isfinite(cell) else None
 
     def why_not_given(self, path: str) -> Reason:
@@ -156,23 +166,52 @@ class Result:
 
     def reason(self, key: str, year: int | None = None, trial: int = 0) -> Reason:
         """Why a figure cannot be given, looked for from the line down to what it waits for."""
+        if not self.whole:
+            return self._alone(trial).reason(key, year)
         found = next(self._reasons(key, None if year is None else year - 1, trial, set()), None)
         return found or Reason("too_large", key)
 
-    def _reasons(self, key: str, year: int | None, trial: int, seen: set[str]) -> Iterator[Reason]:
-        if key in seen:
+    def _alone(self, trial: int) -> "Result":
+        """One trial with all its lines."""
+        drivers = {
+            path: values[..., trial if values.shape[-1] > 1 else 0].reshape(1, -1)
+            for path, values in self.driven.items()
+        }
+        return evaluate(self.plan, drivers)
+
+    def _reasons(
+        self, key: str, year: int | None, trial: int, seen: set[tuple[str, int | None]]
+    ) -> Iterator[Reason]:
+        if (key, year) in seen:
             return
-        seen.add(key)
+        seen.add((key, year))
         line = self.declared[key]
         yield from self._own_reason(line, year, trial)
-        leaves = [leaf for one in formulas_of(line) for leaf in one.leaves()]
-        for leaf in leaves:
+        for leaf in formulas_below(line):
             if not isinstance(leaf, f.Line):
-                yield from self._blocked(key, leaf)
-        lines = [leaf.key for leaf in leaves if isinstance(leaf, f.Line)]
-        for below in sorted(lines, key=lambda one: not self._missing(one, year, trial)):
+                yield from self._blocked(key, leaf, trial)
+        lines = [one for node in formulas_of(line) for one in self._lines_below(node, year, trial)]
+        for below, at in sorted(lines, key=lambda one: not self._missing(one[0], one[1], trial)):
             if self._missing(below, None, trial):
-                yield from self._reasons(below, year, trial, seen)
+                yield from self._reasons(below, at, trial, seen)
+
+    def _lines_below(
+        self, node: f.Formula, year: int | None, trial: int
+    ) -> Iterator[tuple[str, int | None]]:
+        """The lines in a formula, each with the year it is read at; None is all of them."""
+        if isinstance(node, f.Line):
+            yield node.key, year
+        if isinstance(node, f.AtYear):
+            year = self._year_of(node.year, trial)
+        for part in node.parts():
+            yield from self._lines_below(part, year, trial)
+
+    def _year_of(self, node: f.Formula, trial: int) -> int | None:
+        """Which year, from 0, a formula looks at; None where it is not one of the row."""
+        figure = node.value if isinstance(node, f.Number) else None
+        if isinstance(node, f.Given):
+            figure = self.given(node.path, trial)
+        return int(figure) - 1 if figure is not None and 1 <= figure <= YEARS else None
 
     def _own_reason(self, line: Declared, year: int | None, trial: int) -> Iterator[Reason]:
         for position, (_, code) in enumerate(line.unless):
@@ -181,18 +220,18 @@ class Result:
                 yield Reason(code, line.key)
         if isinstance(line.body, Output):
             kernel = KERNELS[line.body.kernel]
-            arguments = [self._argument(one) for one in line.body.arguments]
-            if kernel.explain is not None and not any(np.isnan(one).any() for one in arguments):
+            lines = [one.key for one in line.body.arguments if isinstance(one, f.Line)]
+            if kernel.explain is not None and not any(
+                self._missing(key, None, trial) for key in lines
+            ):
+                arguments = [self.values[key] for key in lines]
                 at = min(trial, arguments[0].shape[-1] - 1)
                 yield Reason("no_rate", line.key, kernel.explain(arguments, at))
 
-    def _argument(self, node: f.Formula) -> Floats:
-        return self.values[node.key] if isinstance(node, f.Line) else np.zeros((1, 1))
-
-    def _blocked(self, key: str, leaf: f.Given | f.Fact) -> Iterator[Reason]:
+    def _blocked(self, key: str, leaf: f.Given | f.Fact, trial: int) -> Iterator[Reason]:
         name = leaf.path if isinstance(leaf, f.Given) else leaf.name
-        source = self.plan.inputs if isinstance(leaf, f.Given) else self.plan.facts
-        if name in self.plan.blocked and np.isnan(source[name]).any():
+        read = self.inputs if isinstance(leaf, f.Given) else self.plan.facts
+        if name in self.plan.blocked and np.isnan(self._cells(read[name], None, trial)).any():
             yield Reason("waits_for", key, issue=self.plan.blocked[name])
 
     def _missing(self, key: str, year: int | None, trial: int) -> bool:
@@ -204,6 +243,4 @@ class Result:
         if year is None or column.ndim == 0:
             return column
         months = len(column) // YEARS
-        if len(column) % YEARS or months not in (1, 12):
-            return column
         return column[months * year : months * (year + 1)]

@@ -6,9 +6,10 @@ the pieces' ends into differences and summing those once, whatever the number of
 """
 
 import datetime
-from collections.abc import Iterator, Sequence
+from collections.abc import Iterable, Iterator, Sequence
 from dataclasses import dataclass
 from math import ceil
+from operator import is_
 from typing import Literal, TypeAlias
 
 import numpy as np
@@ -144,26 +145,59 @@ def _penalty(lease: Lease, closing: datetime.date, month: int) -> Iterator[Piece
         yield Piece("penalty", lease.id, month, month + 1, lease.break_penalty)
 
 
-def scatter(all_pieces: Sequence[Piece]) -> dict[str, Floats]:
-    """Month by month sums of each kind, shape (492, 1).
+@dataclass(frozen=True, eq=False)
+class SpaceTable:
+    """The pieces of one space as a table: rows of kind, start, end and amount."""
+
+    space: Space
+    table: Floats
+
+
+def tables(
+    spaces: tuple[Space, ...],
+    closing: datetime.date | None,
+    earlier: tuple[SpaceTable, ...] | None = None,
+) -> tuple[SpaceTable, ...]:
+    """The pieces of all spaces; spaces that an earlier roll of the same closing has are kept."""
+    earlier = earlier or ()
+    held = [one.space for one in earlier]
+    if len(held) == len(spaces) and all(map(is_, held, spaces)):
+        return earlier
+    known = {id(one.space): one for one in earlier}
+    return tuple(known.get(id(space)) or _space_table(space, closing) for space in spaces)
+
+
+def _space_table(space: Space, closing: datetime.date | None) -> SpaceTable:
+    return SpaceTable(space, table_of(space_pieces(space, closing)))
+
+
+def table_of(all_pieces: Iterable[Piece]) -> Floats:
+    """Pieces as a table, shape (4, pieces): the kind's place in KINDS, start, end and amount."""
+    rows = [(_KIND[one.kind], one.start, one.end, one.amount) for one in all_pieces]
+    return np.array([*zip(*rows, strict=True)], dtype=np.float64) if rows else NO_PIECES
+
+
+NO_PIECES = np.empty((4, 0))
+_KIND = {kind: float(row) for row, kind in enumerate(KINDS)}
+
+
+def scatter(table: Floats) -> dict[str, Floats]:
+    """Month by month sums of each kind of a table of pieces, shape (492, 1).
 
     A piece from a = i + f adds 1 − f of its amount in month i and all of it from i + 1 on; its end
     takes the same away. Where no piece of a kind is alive the sum is exactly 0.
     """
+    kind, start, end, amount = table
     width = MONTHS + 2
-    kind = np.array([KINDS.index(piece.kind) for piece in all_pieces], dtype=np.int64)
-    start = np.array([piece.start for piece in all_pieces], dtype=np.float64)
-    end = np.array([piece.end for piece in all_pieces], dtype=np.float64)
-    amount = np.array([piece.amount for piece in all_pieces], dtype=np.float64)
     size = len(KINDS) * width
-    base = kind * width
+    base = kind.astype(np.int64) * width
     first, last = np.floor(start).astype(np.int64), np.floor(end).astype(np.int64)
     f, h = start - first, end - last
     where = np.concatenate([base + first, base + first + 1, base + last, base + last + 1])
     change = np.concatenate([amount * (1 - f), amount * f, -amount * (1 - h), -amount * h])
     sums = np.bincount(where, change, size).reshape(len(KINDS), width).cumsum(axis=1)
     ends = np.concatenate([base + first, base + np.ceil(end).astype(np.int64)])
-    count = np.repeat([1.0, -1.0], len(all_pieces))
+    count = np.repeat([1.0, -1.0], len(kind))
     alive = np.bincount(ends, count, size).reshape(len(KINDS), width).cumsum(axis=1)
     sums = np.where(alive > 0.5, sums, 0.0)[:, :MONTHS]
     return {name: sums[row][:, np.newaxis] for row, name in enumerate(KINDS)}

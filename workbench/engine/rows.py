@@ -2,7 +2,6 @@
 
 from collections.abc import Iterator, Mapping
 from functools import cache
-from typing import Any, get_args
 
 from workbench.deal.deal import Deal
 from workbench.deal.inputs import Field, declared
@@ -28,8 +27,20 @@ _LOOKS: Mapping[str, tuple[Per | None, Per | None]] = {
     "of_year": ("year", "month"),
     "month_starts": ("month", "date"),
     "over_dates": ("date", "once"),
+    "before": (None, None),
+    "on_dates": ("month", "date"),
+    "at_year": ("year", "once"),
+    "first_date": ("date", "once"),
 }
 """What each look wants and gives; None is the row it was given."""
+
+_NODES: Mapping[type[f.Formula], str] = {
+    f.Before: "before",
+    f.OnDates: "on_dates",
+    f.AtYear: "at_year",
+    f.FirstDate: "first_date",
+}
+"""Looks that are nodes of their own: the row first, then at most a single figure."""
 
 
 class RowError(TypeError):
@@ -49,14 +60,13 @@ def row_of(node: f.Formula, lines: Mapping[str, Per]) -> Per:
             return _FACTS.get(name, "month")
         case f.Look(along=along, of=of):
             return _look(along, row_of(of, lines))
-        case f.OnDates(of=of):
-            return _fits("month", row_of(of, lines), "date", node)
-        case f.AtYear(of=of):
-            return _fits("year", row_of(of, lines), "once", node)
-        case f.FirstDate(of=of):
-            return _fits("date", row_of(of, lines), "once", node)
-        case f.OnDate(of=of):
-            return _fits("once", row_of(of, lines), "date", node)
+        case f.Before() | f.OnDates() | f.AtYear() | f.FirstDate():
+            row, *beside = [row_of(part, lines) for part in node.parts()]
+            _single(beside, node)
+            return _look(_NODES[type(node)], row)
+        case f.OnDate():
+            _single([row_of(part, lines) for part in node.parts()], node)
+            return "date"
         case _:
             return _together([row_of(part, lines) for part in node.parts()], node)
 
@@ -68,10 +78,10 @@ def _look(along: str, given: Per) -> Per:
     return given if made is None else made
 
 
-def _fits(wanted: Per, given: Per, made: Per, node: f.Formula) -> Per:
-    if given != wanted:
-        raise RowError(f"{type(node).__name__} wants a row of kind {wanted}, not {given}")
-    return made
+def _single(rows: list[Per], node: f.Formula) -> None:
+    for row in rows:
+        if row != "once":
+            raise RowError(f"{type(node).__name__} wants a single figure, not a row of kind {row}")
 
 
 def _together(rows: list[Per], node: f.Formula) -> Per:
@@ -98,10 +108,8 @@ def _records() -> Mapping[str, type]:
     return dict(_below(Deal))
 
 
-def _below(record: Any) -> Iterator[tuple[str, type]]:
+def _below(record: type) -> Iterator[tuple[str, type]]:
     for field in declared(record).values():
-        kinds = [field.kind, *get_args(field.kind)]
-        for kind in kinds:
-            if isinstance(kind, type) and hasattr(kind, "__dataclass_fields__"):
-                yield field.name, kind
-                yield from _below(kind)
+        for below in field.records:
+            yield field.name, below
+            yield from _below(below)

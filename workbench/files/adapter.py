@@ -1,7 +1,7 @@
 """pydantic over the deal's plain records. Nothing else in the program imports pydantic."""
 
 from functools import cache
-from typing import Any, get_args
+from typing import Any
 
 from pydantic import ConfigDict, TypeAdapter
 
@@ -15,9 +15,8 @@ def record_classes(record: type = Deal) -> dict[str, type]:
     """Every record class below a record, by name."""
     found: dict[str, type] = {record.__name__: record}
     for field in declared(record).values():
-        for kind in (field.kind, *get_args(field.kind)):
-            if isinstance(kind, type) and hasattr(kind, "__dataclass_fields__"):
-                found |= record_classes(kind)
+        for below in field.records:
+            found |= record_classes(below)
     return found
 
 

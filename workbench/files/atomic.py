@@ -2,6 +2,7 @@
 
 import os
 import tempfile
+from contextlib import suppress
 from pathlib import Path
 
 
@@ -9,9 +10,13 @@ def write_atomically(path: Path, data: bytes) -> None:
     """Write beside the target, flush to disk, then replace. Raises OSError; leaves no remains.
 
     An existing file keeps its permissions; a symbolic link keeps pointing, its target is replaced.
+    What is no ordinary file, such as a pipe or a terminal, is written to as it is.
     """
-    target = path.resolve()
-    handle, name = tempfile.mkstemp(prefix=f".{target.name}.", suffix=".part", dir=target.parent)
+    target = Path(os.path.realpath(path))
+    if target.exists() and not target.is_file():
+        target.write_bytes(data)
+        return
+    handle, name = tempfile.mkstemp(prefix=".groundcourse-", suffix=".part", dir=target.parent)
     part = Path(name)
     try:
         with os.fdopen(handle, "wb") as file:
@@ -33,11 +38,12 @@ def _umask() -> int:
 
 
 def _sync_folder(folder: Path) -> None:
-    """Make the rename itself durable, where the system lets a folder be opened."""
+    """Make the rename itself durable, where the system can; the file is whole in any case."""
     if not hasattr(os, "O_DIRECTORY"):
         return
-    handle = os.open(folder, os.O_RDONLY | os.O_DIRECTORY)
-    try:
-        os.fsync(handle)
-    finally:
-        os.close(handle)
+    with suppress(OSError):
+        handle = os.open(folder, os.O_RDONLY | os.O_DIRECTORY)
+        try:
+            os.fsync(handle)
+        finally:
+            os.close(handle)

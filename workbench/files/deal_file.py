@@ -12,20 +12,20 @@ from workbench.deal.checks_records import misnamed
 from workbench.deal.deal import Deal
 from workbench.files.adapter import deal_adapter
 from workbench.files.atomic import write_atomically
-from workbench.files.faults import Fault, UnreadableError
+from workbench.files.faults import Fault, UnreadableError, system_fault
 from workbench.files.migrations import Raw, migrate
+from workbench.files.refusals import odd_years, refusals
 from workbench.files.strict_json import parse
 
 
 def read_deal(path: Path) -> Deal:
     """The deal in a file. Raises UnreadableError, each fault with its place in words."""
     try:
-        text = path.read_text(encoding="utf-8")
+        text = path.read_text(encoding="utf-8-sig")
     except UnicodeDecodeError:
         raise UnreadableError(Fault("", "this is not a deal: it is not UTF-8 text")) from None
     except OSError as error:
-        reason = error.strerror or "it cannot be read"
-        raise UnreadableError(Fault("", f"{reason[0].lower()}{reason[1:]}")) from None
+        raise UnreadableError(system_fault(error)) from None
     return deal_from_text(text)
 
 
@@ -41,13 +41,13 @@ def deal_from_raw(raw: Raw) -> Deal:
     """The deal in plain data of any schema version. Raises UnreadableError."""
     current = migrate(raw)
     try:
-        deal = deal_adapter().validate_json(json.dumps(current), strict=True)
+        deal = cast(Deal, deal_adapter().validate_json(json.dumps(current), strict=True))
     except ValidationError as error:
-        raise UnreadableError(*(_fault(current, dict(one)) for one in error.errors())) from None
-    faults = [Fault(path, sentence) for path, sentence in misnamed(deal)]
+        raise UnreadableError(*refusals(current, error.errors())) from None
+    faults = [*odd_years(current), *(Fault(*one) for one in misnamed(deal))]
     if faults:
         raise UnreadableError(*faults)
-    return cast(Deal, deal)
+    return deal
 
 
 def deal_to_raw(deal: Deal) -> Raw:
@@ -73,59 +73,3 @@ def _plain(value: Any) -> Any:
     if isinstance(value, dict):
         return {str(key): _plain(held) for key, held in value.items()}
     return value.isoformat() if isinstance(value, date) else value
-
-
-def _fault(raw: Raw, error: dict[str, Any]) -> Fault:
-    """One of pydantic's errors at a key path of ours, worded for the person who typed the file."""
-    location = [part for part in error["loc"] if part != "[key]"]
-    place = _place(raw, location)
-    shown = json.dumps(error.get("input"), ensure_ascii=False, default=str)
-    shown = shown if len(shown) <= 60 else f"{shown[:57]}…"
-    kind = str(error["type"])
-    if kind == "unexpected_keyword_argument":
-        return Fault(place, "a deal has no such key; check its spelling against the schema")
-    if kind == "missing":
-        return Fault(place, "this must be there and is missing")
-    message = str(error["msg"]).removeprefix("Input should be ")
-    return Fault(place, f"{shown} is not {_noun(kind, message)}")
-
-
-_NOUNS = {
-    "float_type": "a number",
-    "finite_number": "a finite number",
-    "int_type": "a whole number",
-    "int_from_float": "a whole number",
-    "int_parsing": "a deal year, a whole number from 1",
-    "string_type": "a text",
-    "bool_type": "true or false",
-    "date_type": "a date like 2027-01-31",
-    "date_from_datetime_parsing": "a date like 2027-01-31",
-    "date_parsing": "a date like 2027-01-31",
-    "tuple_type": "a list in brackets",
-    "mapping_type": "an object in braces",
-    "dict_type": "an object in braces",
-    "dataclass_type": "an object in braces",
-    "dataclass_exact_type": "an object in braces",
-}
-
-
-def _noun(kind: str, message: str) -> str:
-    if kind == "literal_error":
-        return "one of " + message.replace("'", "").replace(" or ", ", ")
-    return _NOUNS.get(kind, message)
-
-
-def _place(raw: Any, location: list[Any]) -> str:
-    """The key path of an error's location: items by id where they have one, else by number."""
-    place = ""
-    here = raw
-    for part in location:
-        if isinstance(part, int) and isinstance(here, list):
-            here = here[part]
-            identity = here.get("id") if isinstance(here, dict) else None
-            name = place.rpartition(".")[2]
-            place = f"{name}@{identity}" if isinstance(identity, str) else f"{place}[{part + 1}]"
-            continue
-        here = here.get(str(part)) if isinstance(here, dict) else None
-        place = f"{place}.{part}" if place else str(part)
-    return place

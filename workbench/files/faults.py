@@ -20,3 +20,9 @@ class UnreadableError(Exception):
     def __init__(self, *faults: Fault) -> None:
         super().__init__("\n".join(map(str, faults)))
         self.faults = faults
+
+
+def system_fault(error: OSError) -> Fault:
+    """What the system says about a file that it could not read or write."""
+    reason = error.strerror or str(error) or "it cannot be used"
+    return Fault("", f"{reason[0].lower()}{reason[1:]}")

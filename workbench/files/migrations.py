@@ -22,7 +22,8 @@ def migrate(
     """
     version = raw.get("schema")
     if not isinstance(version, int) or isinstance(version, bool) or version < 1:
-        sentence = f"the schema version must be a whole number from 1 to {newest}"
+        allowed = f"a whole number from 1 to {newest}" if newest > 1 else "1"
+        sentence = f"the version of the schema is needed here; it must be {allowed}"
         raise UnreadableError(Fault("schema", sentence))
     if version > newest:
         sentence = (

@@ -2,7 +2,7 @@
 
 from dataclasses import replace
 
-from workbench.charts.shapes import moved
+from workbench.charts.wrapping import Run
 from workbench.report import sheet
 from workbench.report.document import (
     Block,
@@ -11,10 +11,21 @@ from workbench.report.document import (
     Paragraph,
     Section,
     SideBySide,
+    Subheading,
     Table,
+    YearTable,
 )
-from workbench.report.slabs import Slab, heading_slabs, piled, stack_height, text_slabs
-from workbench.report.tables import key_figure_slabs, table_slabs
+from workbench.report.key_figure_slabs import key_figure_slabs
+from workbench.report.slabs import (
+    Slab,
+    heading_slabs,
+    piled,
+    stack_height,
+    subheading_slabs,
+    text_slabs,
+)
+from workbench.report.tables import table_slabs
+from workbench.report.year_tables import year_table_slabs
 
 
 def section_slabs(section: Section, room: float, tallest: float) -> tuple[Slab, ...]:
@@ -32,9 +43,15 @@ def column_slabs(blocks: tuple[Block, ...], room: float, tallest: float) -> tupl
     slabs: list[Slab] = []
     for place, block in enumerate(blocks):
         first, *others = _block_slabs(block, room, tallest)
-        above = sheet.PARAGRAPH_SPACE if isinstance(block, Paragraph) else sheet.BLOCK_SPACE
-        slabs += [replace(first, space=above if place else 0.0), *others]
+        slabs += [replace(first, space=_above(block) if place else 0.0), *others]
     return tuple(slabs)
+
+
+def _above(block: Block) -> float:
+    """The space over a block that is not the first."""
+    if isinstance(block, Paragraph):
+        return sheet.PARAGRAPH_SPACE
+    return sheet.SUBHEADING_SPACE if isinstance(block, Subheading) else sheet.BLOCK_SPACE
 
 
 def _block_slabs(block: Block, room: float, tallest: float) -> tuple[Slab, ...]:
@@ -44,10 +61,23 @@ def _block_slabs(block: Block, room: float, tallest: float) -> tuple[Slab, ...]:
         return key_figure_slabs(block, room)
     if isinstance(block, Table):
         return table_slabs(block, room)
+    if isinstance(block, YearTable):
+        return year_table_slabs(block, room)
+    if isinstance(block, Subheading):
+        return subheading_slabs(block.text, room)
     if isinstance(block, Figure):
-        shapes = tuple(moved(shape, 0, 0) for shape in block.picture.shapes)
-        return (Slab(block.picture.height, shapes),)
+        return (_figure(block, room),)
     return _side_by_side(block, room, tallest)
+
+
+def _figure(figure: Figure, room: float) -> Slab:
+    """The picture with its line under it, in one piece."""
+    picture = Slab(figure.picture.height, figure.picture.shapes)
+    if not figure.caption:
+        return picture
+    under = text_slabs((Run(figure.caption),), sheet.NOTE, room, "muted")
+    whole = (picture, replace(under[0], space=3.0), *under[1:])
+    return Slab(stack_height(whole), piled(whole))
 
 
 def _side_by_side(block: SideBySide, room: float, tallest: float) -> tuple[Slab, ...]:

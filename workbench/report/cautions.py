@@ -13,6 +13,16 @@ FOOT = (
 )
 """For the foot of every page."""
 
+IN_ONE = (
+    "Arithmetic on the user’s assumptions at the user’s required return: not market value, and "
+    "not an appraisal, evaluation or valuation, whoever prepared it. Not investment, tax, legal, "
+    "accounting or lending advice, not an offer, not a loan commitment. Projections are not facts "
+    "and will differ from what happens. Check the figures with documents, local codes and rules, "
+    "and licensed professionals. The condition of the buildings, title, the environment, zoning "
+    "and the regulation of rents are not examined."
+)
+"""All of it in one paragraph, for figures that stand on no page."""
+
 NOT_STATED = "not stated"
 
 _FULL = (

@@ -1,5 +1,6 @@
 """A document as plain data: what is said, in order. How it is drawn is the drawer's matter."""
 
+import datetime
 from collections.abc import Iterator
 from dataclasses import dataclass, fields, is_dataclass
 from typing import Literal, TypeAlias
@@ -45,6 +46,8 @@ class Column:
     title: str
     align: Align = "left"
     share: float = 1.0
+    fit: bool = False
+    """Whether it is as wide as its widest cell; the others share what is left."""
 
 
 @dataclass(frozen=True)
@@ -56,13 +59,49 @@ class Table:
     strong: frozenset[int] = frozenset()
     most_lines: int | None = None
     """Where set, cells are cut after so many lines, with an ellipsis."""
+    notes: tuple[str, ...] = ()
+    """Where given, a line under each row across all columns; empty where there is none."""
+    fine: bool = False
+    """Whether it is set smaller, for many columns."""
+    slanted: frozenset[tuple[int, int]] = frozenset()
+    """Rows and columns of cells set slanting and paler."""
+    in_groups: bool = False
+    """Whether the rows down to each strong one are kept on one page."""
+
+
+@dataclass(frozen=True)
+class YearLine:
+    """A row of a table by year. Cells whose place is in `following` repeat the year before."""
+
+    label: str
+    cells: tuple[str, ...]
+    strong: bool = False
+    following: frozenset[int] = frozenset()
+
+
+@dataclass(frozen=True)
+class YearTable:
+    """A column for each year, split into as many tables as the width asks for."""
+
+    corner: str
+    """What the amounts are counted in."""
+    years: tuple[str, ...]
+    lines: tuple[YearLine, ...]
+
+
+@dataclass(frozen=True)
+class Subheading:
+    """A title within a section."""
+
+    text: str
 
 
 @dataclass(frozen=True)
 class Figure:
-    """A picture at the size it was laid out for."""
+    """A picture at the size it was laid out for, and a line under it."""
 
     picture: Picture
+    caption: str = ""
 
 
 @dataclass(frozen=True)
@@ -74,7 +113,7 @@ class SideBySide:
     share: float = 0.5
 
 
-Block: TypeAlias = Paragraph | KeyFigures | Table | Figure | SideBySide
+Block: TypeAlias = Paragraph | Subheading | KeyFigures | Table | YearTable | Figure | SideBySide
 
 
 @dataclass(frozen=True)
@@ -100,6 +139,8 @@ class Document:
     foot: str
     sections: tuple[Section, ...]
     paper: Paper = "a4"
+    made_on: datetime.date | None = None
+    """For the properties of the file; not the day it was written, which would differ each time."""
 
 
 def plain(text: str, look: Look = "body") -> Paragraph:

@@ -1,7 +1,7 @@
 """A document laid out on pages: each page a picture of plain shapes, as large as the sheet."""
 
 from collections.abc import Iterator
-from dataclasses import dataclass
+from dataclasses import dataclass, field
 from itertools import pairwise
 
 from workbench.charts.lettering import CAP_HEIGHT, LEADING, printable, shorten
@@ -10,12 +10,32 @@ from workbench.charts.wrapping import wrap, wrap_short
 from workbench.report import sheet
 from workbench.report.blocks import section_slabs
 from workbench.report.document import Document
-from workbench.report.slabs import Slab
+from workbench.report.slabs import Mark, Slab
 
 _FOOT_GAP = 14.0
 _FOOT_NUMBER = 60.0
 """Room for the page number at the right of the foot."""
 _RUNNING_HEAD = 26.0
+
+
+@dataclass(frozen=True)
+class Page(Picture):
+    """A page, with the sections that begin on it and how far down."""
+
+    marks: tuple[tuple[Mark, float], ...] = ()
+
+
+@dataclass
+class _Body:
+    """What is gathered for one page."""
+
+    shapes: list[Shape] = field(default_factory=list)
+    marks: list[tuple[Mark, float]] = field(default_factory=list)
+
+    def put(self, slab: Slab, down: float) -> None:
+        self.shapes += [moved(shape, sheet.SIDE, down) for shape in slab.shapes]
+        if slab.mark is not None:
+            self.marks.append((slab.mark, down))
 
 
 @dataclass(frozen=True)
@@ -30,7 +50,7 @@ class _Room:
         return self.bottom - self.top
 
 
-def lay_out(document: Document) -> tuple[Picture, ...]:
+def lay_out(document: Document) -> tuple[Page, ...]:
     """The pages of a document."""
     paper = sheet.sheet_of(document.paper)
     head, head_height = _title_block(document, paper.column)
@@ -38,22 +58,22 @@ def lay_out(document: Document) -> tuple[Picture, ...]:
     first = _Room(sheet.TOP + head_height, bottom)
     later = _Room(sheet.TOP + _RUNNING_HEAD, bottom)
     bodies = list(_pages(document, paper.column, first, later))
-    pages: list[Picture] = []
+    pages: list[Page] = []
     for number, body in enumerate(bodies, start=1):
         top = head if number == 1 else _running_head(document, paper.column)
         shapes = [moved(shape, sheet.SIDE, sheet.TOP) for shape in top]
-        shapes += [moved(shape, sheet.SIDE, 0) for shape in body]
+        shapes += body.shapes
         shapes += _foot(document, paper, f"page {number} of {len(bodies)}")
-        pages.append(Picture(paper.width, paper.height, tuple(shapes)))
+        marks = [(Mark(document.kind), sheet.TOP)] if number == 1 else []
+        size = (paper.width, paper.height)
+        pages.append(Page(*size, tuple(shapes), marks=(*marks, *body.marks)))
     return tuple(pages)
 
 
-def _pages(
-    document: Document, column: float, first: _Room, later: _Room
-) -> Iterator[tuple[Shape, ...]]:
-    """The shapes of each page's body, placed on the sheet."""
+def _pages(document: Document, column: float, first: _Room, later: _Room) -> Iterator[_Body]:
+    """The body of each page, placed on the sheet."""
     room = first
-    page: list[Shape] = []
+    page = _Body()
     down = room.top
     for section in document.sections:
         slabs = section_slabs(section, column, later.height)
@@ -62,16 +82,16 @@ def _pages(
             empty = down == room.top
             need = _needed(slabs[place:], later.height) + (0.0 if empty else slab.space)
             if not empty and (forced or down + need > room.bottom):
-                yield tuple(page)
-                page, room, empty = [], later, True
+                yield page
+                page, room, empty = _Body(), later, True
                 down = room.top
                 for header in slab.header:
-                    page += [moved(shape, 0, down) for shape in header.shapes]
+                    page.put(header, down)
                     down += header.height
             down += 0.0 if empty else slab.space
-            page += [moved(shape, 0, down) for shape in slab.shapes]
+            page.put(slab, down)
             down += slab.height
-    yield tuple(page)
+    yield page
 
 
 def _needed(slabs: tuple[Slab, ...], tallest: float) -> float:

@@ -1,8 +1,7 @@
 """A figure's working set out for reading: names, numbers, operands, and what lies below them."""
 
-from collections.abc import Iterator
+from collections.abc import Callable, Iterator
 from dataclasses import dataclass
-from typing import Any
 
 from workbench.deal.deal import Deal
 from workbench.deal.paths import UnknownPathError, field_of, get
@@ -15,7 +14,7 @@ from workbench.report.spelling import Speller, when
 from workbench.text.labels import item_name, label_of
 from workbench.text.locale import DEFAULT, Locale, find_locale
 from workbench.text.messages import word_reason
-from workbench.text.numbers import MISSING, number, rate, trimmed
+from workbench.text.numbers import MINUS, MISSING, number, rate, trimmed
 
 
 @dataclass(frozen=True)
@@ -91,15 +90,20 @@ class Shower:
         return self._expression(shown, lambda operand: self.speller.operand(operand))
 
     def numbers(self, shown: Working) -> str:
-        """The formula with numbers."""
-        return self._expression(shown, lambda one: self.amount(one.value, self.unit(one)))
+        """The formula with numbers; a negative one after a sign stands in brackets."""
 
-    def _expression(self, shown: Working, name: Any) -> str:
+        def amount(operand: Operand) -> str:
+            text = self.amount(operand.value, self.unit(operand))
+            return f"({text})" if text.startswith(MINUS) and len(shown.tokens) > 1 else text
+
+        return self._expression(shown, amount)
+
+    def _expression(self, shown: Working, name: Callable[[Operand], str]) -> str:
         return "".join(self._token(shown, token, name) for token in shown.tokens)
 
-    def _token(self, shown: Working, token: Token, name: Any) -> str:
+    def _token(self, shown: Working, token: Token, name: Callable[[Operand], str]) -> str:
         if isinstance(token, Ref):
-            return str(name(shown.operands[token.number - 1]))
+            return name(shown.operands[token.number - 1])
         return token if isinstance(token, str) else trimmed(token, self.locale, 0, 6)
 
     def unit(self, operand: Operand) -> str:

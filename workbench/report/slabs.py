@@ -9,6 +9,14 @@ from workbench.report import sheet
 
 
 @dataclass(frozen=True)
+class Mark:
+    """The beginning of a section, for the outline of the file; level 0 is a section's own."""
+
+    title: str
+    level: int = 0
+
+
+@dataclass(frozen=True)
 class Slab:
     """Shapes from a top left corner of their own, so high, with space above unless first."""
 
@@ -19,6 +27,7 @@ class Slab:
     """Whether the next slab must stand on the same page."""
     header: tuple["Slab", ...] = ()
     """What is repeated above it where it begins a page."""
+    mark: Mark | None = None
 
 
 def stack_height(slabs: tuple[Slab, ...]) -> float:
@@ -65,4 +74,15 @@ def heading_slabs(title: str, room: float) -> tuple[Slab, ...]:
     """A heading over a thin rule; it never stands last on a page."""
     lines = text_slabs((Run(title, "bold"),), sheet.HEADING, room)
     rule = Slab(5.0, (Line(0, 1.5, room, 1.5, "rule", 0.75),))
-    return tuple(replace(slab, keep_next=True) for slab in (*lines, rule))
+    return _leading((*lines, rule), Mark(title))
+
+
+def subheading_slabs(title: str, room: float) -> tuple[Slab, ...]:
+    """A title within a section; it never stands last on a page."""
+    lines = text_slabs((Run(title, "bold"),), sheet.SUBHEADING, room)
+    return _leading((*lines, Slab(2.0)), Mark(title, 1))
+
+
+def _leading(slabs: tuple[Slab, ...], mark: Mark) -> tuple[Slab, ...]:
+    first, *others = (replace(slab, keep_next=True) for slab in slabs)
+    return (replace(first, mark=mark), *others)

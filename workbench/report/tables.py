@@ -1,105 +1,141 @@
-"""Tables and key figures cut into slabs."""
+"""Tables cut into slabs."""
 
 import sys
-from dataclasses import replace
+from dataclasses import dataclass, replace
+from itertools import count
 
-from workbench.charts.lettering import CAP_HEIGHT, LEADING, Weight, printable, width
+from workbench.charts.lettering import CAP_HEIGHT, LEADING, Weight, printable
 from workbench.charts.shapes import Anchor, Line, Role, Shape, Text
 from workbench.charts.wrapping import wrap, wrap_short
 from workbench.report import sheet
-from workbench.report.document import Column, KeyFigure, KeyFigures, Table
+from workbench.report.document import Column, Table
+from workbench.report.fitting import fitted
 from workbench.report.slabs import Slab
 
-_GAP = 10.0
-_PAD = 2.6
 _WHOLE_ROW = 6
 """Rows of up to so many lines are kept on one page."""
 
 
+@dataclass(frozen=True)
+class _Setting:
+    """Measures of one table on one column of text."""
+
+    table: Table
+    room: float
+    widths: tuple[float, ...]
+
+    @property
+    def gap(self) -> float:
+        return sheet.FINE_GAP if self.table.fine else sheet.CELL_GAP
+
+    @property
+    def size(self) -> float:
+        return sheet.FINE if self.table.fine else sheet.CELL
+
+    @property
+    def pad(self) -> float:
+        return 1.7 if self.table.fine else 2.6
+
+
+@dataclass(frozen=True)
+class _Cell:
+    """A cell's lines and how they are set."""
+
+    column: Column
+    lines: tuple[str, ...]
+    weight: Weight
+    colour: Role
+
+
 def table_slabs(table: Table, room: float) -> tuple[Slab, ...]:
     """The heading of a table, repeated on each page, and its rows; long rows break by lines."""
-    widths = _widths(table.columns, room)
-    header: tuple[Slab, ...] = ()
-    if any(column.title for column in table.columns):
-        titles = tuple(column.title for column in table.columns)
-        header = _row_slabs(table, titles, widths, "regular", "muted")
-        ruled = Line(0, header[-1].height, room, header[-1].height, "ink", 0.6)
-        header = (*header[:-1], replace(header[-1], shapes=(*header[-1].shapes, ruled)))
-        header = tuple(replace(slab, keep_next=True) for slab in header)
+    setting = _Setting(table, room, fitted(table, room))
+    header = _header(setting)
     slabs = list(header)
-    for number, row in enumerate(table.rows):
-        strong = number in table.strong
-        lines = _row_slabs(table, row, widths, "bold" if strong else "regular", "ink")
-        if number:
-            rule = Line(0, 0, room, 0, "ink" if strong else "rule", 0.6 if strong else 0.4)
-            lines = (replace(lines[0], shapes=(*lines[0].shapes, rule)), *lines[1:])
+    for number in range(len(table.rows)):
+        lines = _row(setting, number)
+        if _is_kept(table, number):
+            lines[-1] = replace(lines[-1], keep_next=True)
         slabs += [replace(line, header=header) for line in lines]
     return tuple(slabs)
 
 
-def _widths(columns: tuple[Column, ...], room: float) -> tuple[float, ...]:
-    free = room - _GAP * (len(columns) - 1)
-    total = sum(column.share for column in columns)
-    return tuple(free * column.share / total for column in columns)
+def _is_kept(table: Table, number: int) -> bool:
+    """Whether a row stands on the page of the next one: no total stands alone."""
+    last = number == len(table.rows) - 1
+    in_group = table.in_groups and number not in table.strong
+    return not last and (in_group or number + 1 in table.strong)
 
 
-def _row_slabs(
-    table: Table, row: tuple[str, ...], widths: tuple[float, ...], weight: Weight, colour: Role
-) -> tuple[Slab, ...]:
-    """One slab for each line of the row's longest cell."""
-    size = sheet.CELL if colour == "ink" else sheet.NOTE
-    most = table.most_lines or sys.maxsize
+def _header(setting: _Setting) -> tuple[Slab, ...]:
+    """The titles over a dark rule; none where no column has one."""
+    columns = setting.table.columns
+    if not any(column.title for column in columns):
+        return ()
+    size = sheet.FINE_NOTE if setting.table.fine else sheet.NOTE
     cells = [
-        wrap_short(printable(text), size, wide, most, weight)
-        for text, wide in zip(row, widths, strict=True)
+        _Cell(column, wrap(printable(column.title), size, wide), "regular", "muted")
+        for column, wide in zip(columns, setting.widths, strict=True)
     ]
-    count = max(len(cell) for cell in cells)
+    slabs = _lines(setting, _hung(cells), size)
+    ruled = Line(0, slabs[-1].height, setting.room, slabs[-1].height, "ink", 0.6)
+    slabs[-1] = replace(slabs[-1], shapes=(*slabs[-1].shapes, ruled))
+    return tuple(replace(slab, keep_next=True) for slab in slabs)
+
+
+def _hung(cells: list[_Cell]) -> list[_Cell]:
+    """Titles of fewer lines stand on the last line of the others."""
+    tall = max(len(cell.lines) for cell in cells)
+    return [replace(cell, lines=("",) * (tall - len(cell.lines)) + cell.lines) for cell in cells]
+
+
+def _row(setting: _Setting, number: int) -> list[Slab]:
+    table, size = setting.table, setting.size
+    strong = number in table.strong
+    most = table.most_lines or sys.maxsize
+    cells: list[_Cell] = []
+    for place, column, text, wide in zip(
+        count(), table.columns, table.rows[number], setting.widths, strict=False
+    ):
+        slanted = (number, place) in table.slanted
+        weight: Weight = "italic" if slanted else "bold" if strong else "regular"
+        lines = wrap_short(printable(text), size, wide, most, weight)
+        cells.append(_Cell(column, lines, weight, "muted" if slanted else "ink"))
+    slabs = _lines(setting, cells, size)
+    if number:
+        rule = Line(0, 0, setting.room, 0, "ink" if strong else "rule", 0.6 if strong else 0.4)
+        slabs[0] = replace(slabs[0], shapes=(*slabs[0].shapes, rule))
+    note = table.notes[number] if table.notes else ""
+    return _with_note(setting, slabs, note) if note else slabs
+
+
+def _lines(setting: _Setting, cells: list[_Cell], size: float) -> list[Slab]:
+    """One slab for each line of the row's longest cell."""
     tall = size * LEADING
+    most = max(len(cell.lines) for cell in cells)
     slabs: list[Slab] = []
-    for place in range(count):
-        above = _PAD if place == 0 else 0.0
-        below = _PAD if place == count - 1 else 0.0
+    for place in range(most):
+        above = setting.pad if place == 0 else 0.0
+        below = setting.pad if place == most - 1 else 0.0
         baseline = above + (tall + CAP_HEIGHT * size) / 2
         texts: list[Shape] = []
         left = 0.0
-        for column, cell, wide in zip(table.columns, cells, widths, strict=True):
-            if place < len(cell):
-                to_right = column.align == "right"
+        for cell, wide in zip(cells, setting.widths, strict=True):
+            if place < len(cell.lines) and cell.lines[place]:
+                to_right = cell.column.align == "right"
                 x = left + wide if to_right else left
                 anchor: Anchor = "end" if to_right else "start"
-                texts.append(Text(x, baseline, cell[place], size, anchor, weight, colour))
-            left += wide + _GAP
-        keep = place < count - 1 and (count <= _WHOLE_ROW or place in (0, count - 2))
+                line = cell.lines[place]
+                texts.append(Text(x, baseline, line, size, anchor, cell.weight, cell.colour))
+            left += wide + setting.gap
+        keep = place < most - 1 and (most <= _WHOLE_ROW or place in (0, most - 2))
         slabs.append(Slab(above + tall + below, tuple(texts), keep_next=keep))
-    return tuple(slabs)
+    return slabs
 
 
-def key_figure_slabs(figures: KeyFigures, room: float) -> tuple[Slab, ...]:
-    """Each figure with its label on the left, its value on the right, its note underneath."""
-    slabs: list[Slab] = []
-    for number, item in enumerate(figures.items):
-        slab = _key_figure(item, room, figures.air)
-        if number:
-            slab = replace(slab, shapes=(*slab.shapes, Line(0, 0, room, 0, "rule", 0.5)))
-        slabs.append(slab)
-    return tuple(slabs)
-
-
-def _key_figure(item: KeyFigure, room: float, air: float) -> Slab:
-    size = sheet.KEY_VALUE_STRONG if item.strong else sheet.KEY_VALUE
-    label_size = sheet.LOOKS["body"]
-    value = printable(item.value)
-    size *= min(1.0, room * 0.66 / width(value, size, "bold"))
-    label_room = room - width(value, size, "bold") - _GAP
-    labels = wrap(printable(item.label), label_size, label_room, "bold")
-    baseline = 4.0 + air / 2 + size * 0.86
-    shapes: list[Shape] = [Text(room, baseline, value, size, "end", "bold")]
-    shapes += [
-        Text(0, baseline + place * label_size * LEADING, line, label_size, "start", "bold")
-        for place, line in enumerate(labels)
-    ]
-    down = baseline + (len(labels) - 1) * label_size * LEADING
-    for line in wrap(printable(item.note), sheet.NOTE, room) if item.note else ():
-        down += sheet.NOTE * 1.3
-        shapes.append(Text(0, down, line, sheet.NOTE, colour="muted"))
-    return Slab(down + 5.5 + air / 2, tuple(shapes))
+def _with_note(setting: _Setting, row: list[Slab], note: str) -> list[Slab]:
+    """The row with its note, on the same page unless the note is long."""
+    size = sheet.FINE_NOTE if setting.table.fine else sheet.NOTE
+    cell = _Cell(Column(""), wrap(printable(note), size, setting.room), "regular", "muted")
+    whole = replace(setting, widths=(setting.room,))
+    return [*row[:-1], replace(row[-1], keep_next=True), *_lines(whole, [cell], size)]

@@ -1,11 +1,12 @@
 """How the memo puts figures: one reader's marks, one currency, the same words everywhere."""
 
 from dataclasses import dataclass
-from datetime import MAXYEAR
+from datetime import MAXYEAR, date
 
 from workbench.deal.deal import Deal
 from workbench.report.cautions import NOT_STATED
 from workbench.text import numbers
+from workbench.text.currency import find_currency
 from workbench.text.locale import Locale
 from workbench.text.years import year_span
 
@@ -32,6 +33,42 @@ class Voice:
         text = self.money(value)
         currency = self.deal.conventions.currency
         return text if text == numbers.MISSING else f"{currency}\u00a0{text}"
+
+    @property
+    def minor_digits(self) -> int:
+        """Decimals of the currency; two where it is not one of the list."""
+        currency = find_currency(self.deal.conventions.currency)
+        return 2 if currency is None else currency.digits
+
+    def exact(self, value: float | None, decimals: int | None = None) -> str:
+        """An amount as typed: whole, or with the decimals of its currency and what is beyond."""
+        if decimals is not None:
+            return numbers.number(value, self.locale, decimals)
+        text = numbers.trimmed(value, self.locale)
+        if self.locale.decimal in text:
+            return numbers.trimmed(value, self.locale, self.minor_digits)
+        return text
+
+    def scaled(self, value: float | None, scale: numbers.Scale) -> str:
+        return numbers.money(value, self.locale, scale)
+
+    def unit(self, scale: numbers.Scale = numbers.ONE) -> str:
+        """What amounts are counted in: `EUR` or `EUR thousand`."""
+        return f"{self.deal.conventions.currency} {scale.name}".strip()
+
+    @property
+    def area_unit(self) -> str:
+        return _AREA_UNITS[self.deal.conventions.area_unit]
+
+    def area(self, value: float | None) -> str:
+        return numbers.area(value, self.locale, self.area_unit)
+
+    def day(self, value: date | None) -> str:
+        """A date for a table."""
+        return numbers.day(value, self.locale, short=True)
+
+    def count(self, value: float | None) -> str:
+        return numbers.number(value, self.locale)
 
     def share(self, value: float | None) -> str:
         return numbers.percent(value, self.locale)
@@ -88,6 +125,5 @@ class Voice:
             parts.append("1 unit" if units == 1 else f"{count} units")
         if spaces and all(space.area is not None for space in spaces):
             area = sum((space.area or 0.0) * (space.count or 0) for space in spaces)
-            unit = _AREA_UNITS[self.deal.conventions.area_unit]
-            parts.append(numbers.area(area, self.locale, unit))
+            parts.append(self.area(area))
         return ", ".join(parts)

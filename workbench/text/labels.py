@@ -4,6 +4,7 @@ from typing import Any
 
 from workbench.deal.deal import Deal
 from workbench.deal.paths import UnknownPathError, field_of, find_item, locate, value_at
+from workbench.text.excerpt import excerpt
 
 ITEMS = {
     "costs": "purchase cost",
@@ -38,8 +39,7 @@ def item_name(deal: Deal, name: str) -> str:
 
 
 def _title(item: Any) -> str:
-    title = str(getattr(item, "name", "") or getattr(item, "tenant", ""))
-    return title if len(title) <= 40 else f"{title[:39]}…"
+    return excerpt(str(getattr(item, "name", "") or getattr(item, "tenant", "")), 40)
 
 
 def label_of(deal: Deal, path: str) -> str:
@@ -48,17 +48,17 @@ def label_of(deal: Deal, path: str) -> str:
         return _PLACES[path]
     head, _, rest = path.partition(".")
     try:
-        if not rest:
+        if "@" in head and not rest:
             name = item_name(deal, head)
             return name[0].upper() + name[1:]
-        label = _input_label(deal, path)
-        return f"{label} of {item_name(deal, head)}" if "@" in head else label
-    except (UnknownPathError, KeyError):
-        return path
-
-
-def _input_label(deal: Deal, path: str) -> str:
-    declared = field_of(deal, path).input
-    label = declared.label if declared is not None else path
-    last = locate(deal, path)[-1]
-    return f"{label}, year {last}" if isinstance(last, int) else label
+        declared = field_of(deal, path).input
+        if declared is None:
+            return path
+        steps = locate(deal, path)
+        is_market = "market_rent" in steps
+        label = f"Market {declared.label.lower()}" if is_market else declared.label
+        item = f" of {item_name(deal, head)}" if "@" in head else ""
+        year = f", year {steps[-1]}" if isinstance(steps[-1], int) else ""
+        return f"{label}{item}{year}"
+    except UnknownPathError:
+        return excerpt(path) or "An entry"

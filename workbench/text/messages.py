@@ -6,51 +6,54 @@ from typing import Any
 
 from workbench.deal.checks import is_fraction
 from workbench.deal.deal import Deal
-from workbench.deal.inputs import Input
 from workbench.deal.issues import Issue
 from workbench.deal.paths import UnknownPathError, field_of, locate, value_at
+from workbench.text.excerpt import excerpt
 from workbench.text.labels import item_name, label_of
 from workbench.text.locale import DEFAULT, Locale, find_locale
-from workbench.text.numbers import day, rate, trimmed
+from workbench.text.numbers import MINUS, day, rate, trimmed
 
 ISSUES: Mapping[str, str] = {
-    "missing": "is needed and has no value yet; {range}",
-    "out_of_range": "{value} is outside what is allowed; {range}",
+    "missing": "{a_value} is needed",
+    "out_of_range": "{value} is not allowed; it must be from {low} to {high}",
+    "no_such_day": "{value} is not allowed; it must be from {first} to {last}",
     "too_long": "the text has {value} characters; at most {high} are allowed",
     "no_such_year": "there is no deal year {value}; years run from {low} to {high}",
     "bad_currency": "“{value}” is not a currency code; three capital letters, such as USD",
     "no_spaces": "there is no space to let yet; enter at least one, with its count of units and "
     "its market rent",
-    "area_needed": "is needed because a rent is given by area; {range}",
+    "area_needed": "{a_value} is needed, since a rent is given by area",
     "areas_needed": "an amount by area needs the area of every space; {space} has none",
-    "date_missing": "is needed: a lease has both its first and its last day, or neither",
+    "date_missing": "a date is needed: a lease has both its first and its last day, or neither",
     "needs_dated_lease": "{value} needs a lease with a first and a last day",
-    "steps_need_dates": "is needed: only a lease with a first and a last day can have steps",
+    "steps_need_dates": "a date is needed, since only a lease with a first and a last day can have "
+    "steps",
     "before_start": "{value} lies before the start on {start}; it must be that day or later",
     "outside_lease": "{value} lies outside the lease, which runs from {start} to {end}",
-    "break_outside_lease": "{value} must lie from the start on {start} to the day before the end "
-    "on {end}",
+    "break_outside_lease": "{value} lies outside the lease; a break must lie from the start on "
+    "{start} to the day before the end on {end}",
     "same_date_twice": "{value} already has a step in this lease; one step a day",
     "amount_or_change": "a step has a new rent or a change, and not both; enter one of them",
     "overlaps": "{value} lies before {lease} has ended on {end}; it must be later",
     "break_before_next": "{value} is a break although {lease} follows on {start}; only the last "
     "lease of a space may have one",
-    "undated_beside_others": "is needed: a space with several leases needs the dates of each",
-    "closing_date_needed": "is needed because {because} is dated",
-    "date_or_year": "is needed: works have a date or a deal year from {low} to {high}",
-    "date_and_year": "{value} stands beside a date; keep one of them",
+    "undated_beside_others": "a date is needed, since a space with several leases needs the dates "
+    "of each",
+    "closing_date_needed": "a date is needed, since {because} is dated",
+    "date_or_year": "a year from {low} to {high} is needed, or a date",
+    "date_and_year": "year {value} stands beside a date; keep one of the two",
     "before_closing": "{value} lies before closing on {closing}; works paid at closing are initial "
     "works",
-    "longer_than_term": "{value} is longer than the loan's term; {range}",
-    "longer_than_amortisation": "{value} is longer than interest-only and amortisation together; "
-    "{range}",
-    "method_needs": "is needed for the exit method “{method}”; {range}",
+    "longer_than_term": "{value} is more than the loan’s term; it must be from {low} to {high}",
+    "longer_than_amortisation": "{value} is more than interest-only and amortisation together; it "
+    "must be from {low} to {high}",
+    "method_needs": "{a_value} is needed for the exit method “{method}”",
     "weights": "the weights of the blend sum to {value}; they must sum to 1",
-    "id_ahead": "{value} is not above the id {id}; it must be at least {low}",
+    "id_ahead": "{value} is not above the number of {id}; it must be at least {low}",
     "no_such_lease": "“{value}” is not a lease with dates in this deal",
-    "path_lost": "names “{value}”, which the deal no longer has; the rest of the case still stands",
+    "path_lost": "“{value}” is no longer in the deal; the rest of the case still stands",
     "too_many": "{value} pictures are held; at most {high} are allowed",
-    "not_the_picture": "the data is not a JPEG with this SHA-256",
+    "not_the_picture": "the data is not a JPEG with the SHA-256 {value}",
     "picture_lost": "the picture {value} is named but not held",
     "draft": "the entry “{value}” could not be understood and is not taken in",
 }
@@ -83,10 +86,11 @@ REASONS: Mapping[str, str] = {
 def word_issue(deal: Deal, issue: Issue) -> str:
     """A sentence that names the field, the value and the allowed range."""
     locale = find_locale(deal.conventions.locale) or DEFAULT
-    words = {name: _word(deal, value, locale) for name, value in issue.other.items()}
-    low, high = _shown(deal, issue, issue.low, locale), _shown(deal, issue, issue.high, locale)
-    words |= {"value": _shown(deal, issue, issue.value, locale), "low": low, "high": high}
-    words["range"] = f"allowed is {low} to {high}"
+    unit = "" if issue.code in _PLAIN else _unit(deal, issue.path)
+    words = {name: _named(deal, value, locale) for name, value in issue.other.items()}
+    low, high = _shown(issue.low, unit, locale), _shown(issue.high, unit, locale)
+    words |= {"value": _shown(issue.value, unit, locale), "low": low, "high": high}
+    words["a_value"] = "a date" if unit == "date" else f"a value from {low} to {high}"
     return f"{label_of(deal, issue.path)}: {ISSUES[issue.code].format(**words)}"
 
 
@@ -97,39 +101,45 @@ def word_reason(deal: Deal, code: str, words: str = "", issue: Issue | None = No
     return words.rstrip(".") or REASONS[code]
 
 
-def _word(deal: Deal, value: Any, locale: Locale) -> str:
-    """A value named in a sentence: a date, the id of an item or plain text."""
+_PLAIN = frozenset({"too_long", "no_such_year", "weights"})
+"""Codes whose figures are not in the unit of the input: characters, a year, a sum."""
+
+_LONGEST = 80
+"""Characters of a typed text that a sentence repeats; room for a SHA-256."""
+
+
+def _named(deal: Deal, value: Any, locale: Locale) -> str:
+    """What else a sentence names: a date, an item of the deal, or plain text."""
     if isinstance(value, date):
         return day(value, locale)
-    for list_name in ("leases", "spaces"):
+    for name in (str(value), f"leases@{value}", f"spaces@{value}"):
         try:
-            return item_name(deal, value if "@" in str(value) else f"{list_name}@{value}")
-        except (UnknownPathError, KeyError):
+            return item_name(deal, name)
+        except UnknownPathError:
             continue
-    return str(value)
+    return excerpt(str(value))
 
 
-def _shown(deal: Deal, issue: Issue, value: Any, locale: Locale) -> str:
+def _unit(deal: Deal, path: str) -> str:
+    """The unit of the input behind a path, with amounts that are shares told from money."""
+    try:
+        declared = field_of(deal, path).input
+        steps = locate(deal, path)
+    except UnknownPathError:
+        return ""
+    if is_fraction(value_at(deal, steps[:-1]), str(steps[-1])):
+        return "fraction"
+    return declared.unit if declared is not None else ""
+
+
+def _shown(value: Any, unit: str, locale: Locale) -> str:
+    """A value with all its decimals, since a rounded one could look as if it were allowed."""
     if isinstance(value, date):
         return day(value, locale)
     if isinstance(value, str) or value is None:
+        return excerpt(str(value), _LONGEST)
+    if unit == "year":
         return str(value)
-    declared, fraction = _unit(deal, issue.path)
-    if fraction and issue.code != "weights" and issue.code != "no_such_year":
-        return rate(value, locale, 0, 4)
-    if declared is not None and declared.unit == "year":
-        return str(value)
-    return trimmed(value, locale)
-
-
-def _unit(deal: Deal, path: str) -> tuple[Input | None, bool]:
-    """The declaration behind a path, and whether its value is a fraction shown in per cent."""
-    try:
-        declared = field_of(deal, path).input
-    except (UnknownPathError, KeyError):
-        return None, False
-    if declared is None:
-        return None, False
-    steps = locate(deal, path)
-    owner = value_at(deal, steps[:-1])
-    return declared, declared.unit == "fraction" or is_fraction(owner, str(steps[-1]))
+    if value and not 1e-12 < abs(value) < 1e21:
+        return f"{value:g}".replace("e+", "e").replace(".", locale.decimal).replace("-", MINUS)
+    return rate(value, locale, 0, 30) if unit == "fraction" else trimmed(value, locale, 0, 30)

@@ -115,16 +115,16 @@ def scale_for(values: tuple[float | None, ...], locale: Locale, characters: int 
 
 def percent(value: float | None, locale: Locale, digits: int = 1) -> str:
     """A computed share or return: the fraction 0.535 is `53.5%`."""
-    return _with_percent(number(_hundredfold(value), locale, digits), locale)
+    return _with_percent(number(hundredfold(value), locale, digits), locale)
 
 
 def rate(value: float | None, locale: Locale, least: int = 1, most: int = 2) -> str:
     """An assumed rate with the decimals it was given: 0.06 is `6.0%`, 0.0625 is `6.25%`."""
-    return _with_percent(trimmed(_hundredfold(value), locale, least, most), locale)
+    return _with_percent(trimmed(hundredfold(value), locale, least, most), locale)
 
 
-def _hundredfold(value: float | None) -> float | None:
-    """Shifted as a decimal, since 100 × 0.0715 is not 7.15 in binary."""
+def hundredfold(value: float | None) -> float | None:
+    """A fraction in per cent, shifted as a decimal, since 100 × 0.0715 is not 7.15 in binary."""
     if value is None or not isfinite(value):
         return None
     return float(Decimal(repr(float(value))).scaleb(2, context=_WIDE))

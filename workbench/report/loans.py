@@ -1,0 +1,60 @@
+"""Loans by year: what each costs and leaves, how income covers it, and the loan under the price."""
+
+from workbench.charts.loan import LoanFigures, draw_loan
+from workbench.deal.borrow import Loan
+from workbench.report.document import Block, Figure, Section, Subheading, plain
+from workbench.report.readings import Readings
+from workbench.report.years import Amounts, Row, Years
+
+_CHART = (150.0, 7.6)
+
+
+def loan_section(years: Years, read: Readings, column: float) -> tuple[Section, ...]:
+    """Nothing where no loan is assumed: the first page says so."""
+    loans = years.voice.deal.loans
+    if not loans or not years.count:
+        return ()
+    picture = draw_loan(_figures(years, read), column, *_CHART)
+    blocks: list[Block] = [Subheading("Loan under price"), Figure(picture, picture.words)]
+    for loan in loans:
+        blocks += [Subheading(loan.name or f"Loan {loan.id}"), years.table(_rows(years, loan))]
+    blocks += [Subheading("Cover and debt yield"), years.table(_cover(years, len(loans) > 1))]
+    note = "Debt service is interest and principal; what is repaid at a maturity stands apart."
+    return (Section("Loans by year", (*blocks, plain(note, "small"))),)
+
+
+def _figures(years: Years, read: Readings) -> LoanFigures:
+    return LoanFigures(
+        (years.result.figure("loan_amount"), *years.line("loan_balance")),
+        read.number("price"),
+        (None, *years.line("exit_price_of_year")),
+        years.voice.short_money,
+        years.voice.share,
+    )
+
+
+def _rows(years: Years, loan: Loan) -> list[Row]:
+    balance = years.line(f"balance@{loan.id}")
+    opening: Amounts = (years.result.given(f"loans@{loan.id}.amount"), *balance[:-1])
+    return [
+        Row("Owed at the year’s start", opening),
+        years.row(f"interest@{loan.id}"),
+        years.row(f"principal@{loan.id}"),
+        years.row(f"service@{loan.id}", strong=True),
+        years.row(f"repayment@{loan.id}"),
+        Row("Owed at the year’s end", balance, strong=True),
+    ]
+
+
+def _cover(years: Years, several: bool) -> list[Row]:
+    rows = [
+        years.row("noi_of_year"),
+        years.row("net_cash_flow"),
+        years.row("debt_service"),
+        Row("DSCR on NOI", years.line("dscr_noi"), "multiple", strong=True),
+        Row("DSCR on net cash flow", years.line("dscr_ncf"), "multiple", strong=True),
+        Row("Debt yield", years.line("debt_yield"), "fraction", strong=True),
+    ]
+    if several:
+        rows.insert(0, Row("All loans, owed at the year’s end", years.line("loan_balance")))
+    return rows

@@ -1,0 +1,46 @@
+"""Rents as they were entered, and what they come to a year."""
+
+from collections.abc import Iterable
+
+from workbench.deal.earn import Rent, Space
+from workbench.engine.roll import monthly
+from workbench.report.voice import Voice
+from workbench.text import numbers
+
+
+def rent_text(voice: Voice, rent: Rent) -> str:
+    """`19.50 per m² a month`, as entered."""
+    if rent.amount is None:
+        return numbers.MISSING
+    return f"{voice.exact(rent.amount)} {rent_unit(voice, rent)}"
+
+
+def rent_unit(voice: Voice, rent: Rent) -> str:
+    """What an entered rent is of: `per m² a month`."""
+    return f"per {'unit' if rent.of == 'unit' else voice.area_unit} a {rent.per}"
+
+
+def one_unit(rents: Iterable[Rent]) -> Rent | None:
+    """One of the rents where all are of the same measure and period, so that a title can say it."""
+    given = [rent for rent in rents if rent.amount is not None]
+    kinds = {(rent.per, rent.of) for rent in given}
+    return given[0] if len(kinds) == 1 else None
+
+
+def yearly(space: Space, rent: Rent) -> float | None:
+    """A rent of all units of a space in money a year; None where something is missing."""
+    amount = 12.0 * monthly(space, rent)
+    return amount if amount == amount else None
+
+
+def per_area(rent: Rent, area: float | None, per: str) -> float | None:
+    """A rent of one unit as so much by area and month or year; None where its area is missing."""
+    if rent.amount is None:
+        return None
+    amount = rent.amount
+    if rent.of == "unit":
+        if area is None:
+            return None
+        amount /= area
+    periods = {"month": 12.0, "year": 1.0}
+    return amount * periods[rent.per] / periods[per]

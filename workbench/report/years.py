@@ -1,0 +1,90 @@
+"""The years of the hold: what lines come to in each of them, and tables of that."""
+
+from collections.abc import Sequence
+from dataclasses import dataclass
+from datetime import MAXYEAR
+from typing import Literal, TypeAlias
+
+from workbench.engine.result import Result
+from workbench.report.document import YearLine, YearTable
+from workbench.report.voice import Voice
+from workbench.text import numbers
+from workbench.text.years import month_and_year, year_span
+
+Unit: TypeAlias = Literal["money", "fraction", "multiple", "index"]
+Amounts: TypeAlias = tuple[float | None, ...]
+
+_LONGEST = 10
+"""Characters of an amount in a column of a year; above it the table is in thousands."""
+_TOTAL = "all years"
+
+
+@dataclass(frozen=True)
+class Row:
+    """A row of figures by year, and what they add up to where that is said."""
+
+    label: str
+    values: Amounts
+    unit: Unit = "money"
+    strong: bool = False
+    total: float | None = None
+
+
+@dataclass(frozen=True)
+class Years:
+    """Lines of a result over the hold, in the words of a reader."""
+
+    result: Result
+    voice: Voice
+    count: int
+    """The hold; 0 where it is not known."""
+
+    def line(self, key: str) -> Amounts:
+        """A line in each year: months summed, a balance as it stands at the year's end."""
+        return tuple(self.result.figure(key, year + 1) for year in range(self.count))
+
+    def label(self, key: str) -> str:
+        return self.result.declared[key].label
+
+    def row(self, key: str, unit: Unit = "money", strong: bool = False) -> Row:
+        """A line under its own name."""
+        return Row(self.label(key), self.line(key), unit, strong)
+
+    def headings(self) -> tuple[str, ...]:
+        """Each year's number, with the month of its end where there is a closing date."""
+        closing = self.voice.deal.purchase.closing_date
+        numbered = [str(year + 1) for year in range(self.count)]
+        if closing is None or closing.year + self.count > MAXYEAR:
+            return tuple(numbered)
+        ends = (year_span(closing, int(year))[1] for year in numbered)
+        locale = self.voice.locale
+        return tuple(
+            f"{year}\n{month_and_year(end, locale)}"
+            for year, end in zip(numbered, ends, strict=True)
+        )
+
+    def table(self, rows: Sequence[Row]) -> YearTable:
+        """The rows as a table, amounts in units or, where they are long, in thousands."""
+        amounts = [one for row in rows if row.unit == "money" for one in (*row.values, row.total)]
+        scale = numbers.scale_for(tuple(amounts), self.voice.locale, _LONGEST)
+        summed = any(row.total is not None for row in rows)
+        headings = self.headings()
+        corner = self.voice.unit(scale) + (", year to" if "\n" in headings[0] else ", year")
+        lines = tuple(self._line(row, scale, summed) for row in rows)
+        return YearTable(corner, (*headings, _TOTAL) if summed else headings, lines)
+
+    def _line(self, row: Row, scale: numbers.Scale, summed: bool) -> YearLine:
+        cells = [self._cell(value, row.unit, scale) for value in row.values]
+        if summed:
+            cells.append("" if row.total is None else self._cell(row.total, row.unit, scale))
+        return YearLine(row.label, tuple(cells), row.strong)
+
+    def _cell(self, value: float | None, unit: Unit, scale: numbers.Scale) -> str:
+        match unit:
+            case "money":
+                return self.voice.scaled(value, scale)
+            case "fraction":
+                return self.voice.share(value)
+            case "multiple":
+                return self.voice.ratio(value)
+        return numbers.number(value, self.voice.locale, 4)
