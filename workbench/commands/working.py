@@ -40,7 +40,7 @@ def run(arguments: argparse.Namespace) -> int:
         return UNUSABLE
     tree = list(shower.tree(asked.key, asked.year))
     if arguments.json:
-        workings = [_plain(shower, shown) for _, shown in tree]
+        workings = [plain(shower, shown) for _, shown in tree]
         json.dump(workings, sys.stdout, indent=1, ensure_ascii=False, allow_nan=False)
         print()
     else:
@@ -84,7 +84,7 @@ def _operand(shower: Shower, operand: Operand, name: str, indent: str) -> Iterat
         yield f"{indent}      {shower.cell(operand, cell)}"
 
 
-def _plain(shower: Shower, shown: Working) -> dict[str, Any]:
+def plain(shower: Shower, shown: Working) -> dict[str, Any]:
     """One working as plain data; operands are numbered in the expression as [1], [2], …"""
     return {
         "key": shown.key,

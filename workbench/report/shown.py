@@ -36,10 +36,10 @@ def find(result: Result, name: str, year: int | None) -> Asked | None:
     if name in result.declared:
         return Asked(name, year)
     try:
-        field_of(deal, name)
+        declared = field_of(deal, name).input
     except (UnknownPathError, KeyError):
         return None
-    return Asked(name, None, is_input=True)
+    return None if declared is None else Asked(name, None, is_input=True)
 
 
 class Shower:
@@ -63,7 +63,11 @@ class Shower:
                 if operand.kind == "line" and place not in seen:
                     yield from visit(working_at(self.result, *place), depth + 1)
 
-        yield from visit(working(self.result, key, year), 0)
+        yield from visit(self.working(key, year), 0)
+
+    def working(self, key: str, year: int | None) -> Working:
+        """The working of a line, of a year where it has years."""
+        return working(self.result, key, year)
 
     def title(self, shown: Working) -> str:
         time = when(shown.span, shown.at)

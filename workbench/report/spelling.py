@@ -68,7 +68,7 @@ def when(span: Span, at: int | None) -> str:
     if at is None or span == "once":
         return ""
     if span == "date":
-        return "at closing" if at == 0 else f"{at} months after closing"
+        return "at closing" if at == 0 else f"{at} month{'s' * (at > 1)} after closing"
     return f"{span} {at}"
 
 
