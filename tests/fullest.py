@@ -3,9 +3,11 @@
 import base64
 import hashlib
 import json
-from typing import Any
+from types import UnionType
+from typing import Any, Literal, Union, get_args, get_origin
 
 from workbench.deal.deal import Deal
+from workbench.deal.inputs import Field
 from workbench.files.deal_file import deal_from_text
 
 Raw = dict[str, Any]
@@ -268,3 +270,15 @@ def small_raw() -> Raw:
 
 def small() -> Deal:
     return deal_from_text(json.dumps(small_raw()))
+
+
+def kinds(field: Field) -> tuple[Any, ...]:
+    """What the value of a field may be: its one type, or those of a union."""
+    is_union = get_origin(field.kind) in (Union, UnionType)
+    return get_args(field.kind) if is_union else (field.kind,)
+
+
+def choices(field: Field) -> tuple[str, ...]:
+    """The words a field may hold, where it is one of a few."""
+    literal = (one for one in kinds(field) if get_origin(one) is Literal)
+    return get_args(next(literal, None))

@@ -62,6 +62,7 @@ UNKNOWN = [
     ("cases@k25.set.1", "1"),
     ("property.pictures.1", "1"),
     ("spaces@s9.count", "spaces@s9"),
+    ("costs@c99.amount", "costs@c99"),
     ("spaces@.count", "spaces@"),
     ("@s1.count", "@s1"),
     ("leases@s1.count", "leases@s1"),

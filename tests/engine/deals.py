@@ -5,15 +5,17 @@ from dataclasses import replace
 from datetime import date
 from typing import Any
 
+import numpy as np
 import pytest
 
 from workbench.deal.borrow import Loan
 from workbench.deal.changes import set_value
 from workbench.deal.deal import Deal
-from workbench.deal.earn import Earn, Lease, Rent, Space
+from workbench.deal.earn import Earn, Lease, OtherIncome, Rent, Space, Step
 from workbench.deal.leave import Leave, Returns
 from workbench.deal.purchase import Purchase
-from workbench.engine.plan import compile_deal
+from workbench.deal.spend import Expense, Works
+from workbench.engine.plan import Plan, compile_deal
 from workbench.engine.result import Result, evaluate
 
 CLOSING = date(2027, 1, 1)
@@ -65,3 +67,29 @@ def with_loan(base: Deal, **more: Any) -> Deal:
 
 def evaluated(base: Deal) -> Result:
     return evaluate(compile_deal(base))
+
+
+def fullest() -> Deal:
+    """A deal that reads every fact."""
+    steps = (Step("p1", day("2028-01-01"), change=0.1),)
+    let = lease("2026-01-01", "2029-12-31", 100.0, steps=steps)
+    return replace(
+        deal(space(120.0, let, area=50.0), space(30.0, identity="s2", area=20.0, count=3)),
+        other_income=(
+            OtherIncome("i1", amount=24.0, lease="e1"),
+            OtherIncome("i2", amount=1.0, basis="unit"),
+        ),
+        expenses=(Expense("x1", amount=2.0, basis="area"), Expense("x2", amount=3.0)),
+        works=(
+            Works("w1", amount=500.0, date=day("2028-03-15")),
+            Works("w2", amount=70.0, year=2, month=5, todays_money=True),
+        ),
+    )
+
+
+def unknown_facts(plan: Plan) -> set[str]:
+    return {name for name, fact in plan.facts.items() if np.isnan(fact).any()}
+
+
+def unknown_inputs(plan: Plan) -> set[str]:
+    return {path for path, given in plan.inputs.items() if np.isnan(given).any()}

@@ -9,7 +9,8 @@ from hypothesis import given, settings
 from hypothesis import strategies as st
 
 from tests.engine.deals import near
-from workbench.engine.calendar import MONTHS, add_months, month_starts, position
+from workbench.deal.dates import add_months
+from workbench.engine.calendar import MONTHS, month_starts, position
 
 closings = st.dates(date(1990, 1, 1), date(2060, 12, 31))
 

@@ -4,6 +4,7 @@ import math
 
 import mpmath
 import numpy as np
+import numpy.typing as npt
 import numpy_financial
 import pytest
 import pyxirr
@@ -102,9 +103,11 @@ def test_a_rate_at_which_nothing_can_be_discounted(rate: float) -> None:
         ([1.0, 2.0], [0.0, math.inf], "finite"),
     ],
 )
-def test_series_that_do_not_fit(flows: object, times: object, words: str) -> None:
+def test_series_that_do_not_fit(
+    flows: npt.ArrayLike, times: npt.ArrayLike | None, words: str
+) -> None:
     with pytest.raises(ValueError, match=words):
-        npv(0.1, flows, times)  # type: ignore[arg-type]
+        npv(0.1, flows, times)
 
 
 def test_modified_rate_by_hand() -> None:

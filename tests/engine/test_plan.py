@@ -1,53 +1,28 @@
-"""Compiling a deal: inputs as rows, facts, and what an issue stands in the way of."""
+"""Compiling a deal: inputs as rows, faulty ones, and what an edit takes over."""
 
 from dataclasses import replace
+from random import Random
 from typing import Any
 
 import numpy as np
 import pytest
 
-from tests.engine.deals import changed, day, deal, lease, near, space, with_loan
+from tests.engine.deals import (
+    changed,
+    day,
+    deal,
+    fullest,
+    unknown_facts,
+    unknown_inputs,
+    with_loan,
+)
 from tests.oracle.test_random_deals import drawn
 from workbench.deal.deal import Deal
-from workbench.deal.earn import Lease, OtherIncome, Rent, Step
-from workbench.deal.spend import Expense, Works
-from workbench.engine.calendar import MONTHS
-from workbench.engine.facts import CALENDAR
+from workbench.deal.inputs import leaves
 from workbench.engine.plan import HARMLESS, Plan, compile_deal, expand
 from workbench.engine.roll import KINDS
 from workbench.files.deal_file import deal_from_raw
 from workbench.text.messages import ISSUES
-
-ROLL = frozenset(KINDS)
-WORKS = frozenset({"works", "works_today"})
-COUNTED = frozenset({"market_total", "units", "area"})
-
-
-def fullest() -> Deal:
-    """A deal that reads every fact."""
-    steps = (Step("p1", day("2028-01-01"), change=0.1),)
-    let = lease("2026-01-01", "2029-12-31", 100.0, steps=steps)
-    return replace(
-        deal(space(120.0, let, area=50.0), space(30.0, identity="s2", area=20.0, count=3)),
-        other_income=(
-            OtherIncome("i1", amount=24.0, lease="e1"),
-            OtherIncome("i2", amount=1.0, basis="unit"),
-        ),
-        expenses=(Expense("x1", amount=2.0, basis="area"), Expense("x2", amount=3.0)),
-        works=(
-            Works("w1", amount=500.0, date=day("2028-03-15")),
-            Works("w2", amount=70.0, year=2, month=5, todays_money=True),
-        ),
-    )
-
-
-def unknown_facts(plan: Plan) -> set[str]:
-    return {name for name, fact in plan.facts.items() if np.isnan(fact).any()}
-
-
-def unknown_inputs(plan: Plan) -> set[str]:
-    return {path for path, given in plan.inputs.items() if np.isnan(given).any()}
-
 
 # Year rows
 
@@ -138,101 +113,6 @@ def test_a_switch_is_no_number_of_the_plan() -> None:
     assert "earn.count_empty_time_once" not in compile_deal(fullest()).inputs
 
 
-# Facts
-
-
-def test_facts_by_hand() -> None:
-    facts = compile_deal(fullest()).facts
-    assert facts["units"] == near([1 + 3])
-    assert facts["area"] == near([50 + 3 * 20])
-    assert facts["market_total"] == near([120 + 3 * 30])
-    # 15 March 2028 lies in month 14; month 5 of year 2 is month 16.
-    assert np.flatnonzero(facts["works"]).tolist() == [14] and facts["works"][14, 0] == 500
-    assert np.flatnonzero(facts["works_today"]).tolist() == [16]
-    # The lease runs for 36 months of the hold.
-    assert facts["tied@i1"][:, 0].tolist() == [1.0] * 36 + [0.0] * (MONTHS - 36)
-    assert facts["contract"][[0, 11, 12, 35, 36], 0] == near([100, 100, 110, 110, 0])
-    assert all(fact.shape in ((MONTHS, 1), (1,), (MONTHS + 1, 1)) for fact in facts.values())
-
-
-def test_works_of_one_month_add_up_and_late_ones_do_not_fall() -> None:
-    several = (
-        Works("w1", amount=5.0, year=1, month=12),
-        Works("w2", amount=7.0, date=day("2027-12-31")),
-        Works("w3", amount=1.0, date=day("2068-01-01")),
-        Works("w4", amount=2.0, date=day("2067-12-31")),
-    )
-    works = compile_deal(replace(deal(), works=several)).facts["works"][:, 0]
-    assert {month: works[month] for month in np.flatnonzero(works)} == {11: 12.0, 491: 2.0}
-
-
-def test_the_calendar() -> None:
-    number, month, years = (
-        CALENDAR[name][:, 0] for name in ("month_number", "month_of_year", "date_years")
-    )
-    assert number.tolist() == list(range(1, MONTHS + 1))
-    assert month[:14].tolist() == [*range(1, 13), 1, 2] and len(month) == MONTHS
-    assert years[[0, 6, 12, MONTHS]].tolist() == [0.0, 0.5, 1.0, 41.0]
-
-
-@pytest.mark.parametrize(
-    ("path", "value", "blocked"),
-    [
-        ("spaces@s2.count", None, ROLL | COUNTED),
-        ("spaces@s2.count", 0, ROLL | COUNTED),
-        ("spaces@s1.market_rent.amount", None, ROLL | {"market_total"}),
-        ("spaces@s1.market_rent.amount", -5.0, ROLL | {"market_total"}),
-        # No rent is given by area, so that the rents stand.
-        ("spaces@s2.area", -1.0, {"area"}),
-        ("spaces@s2.area", None, {"area"}),
-        ("leases@e1.rent.amount", None, ROLL | {"tied@i1"}),
-        ("leases@e1.end", day("2025-01-01"), ROLL | {"tied@i1"}),
-        ("leases@e1.end", None, ROLL | {"tied@i1"}),
-        ("leases@e1.free_months", 500, ROLL | {"tied@i1"}),
-        ("steps@p1.change", None, ROLL),
-        ("steps@p1.date", None, ROLL),
-        ("works@w1.amount", None, WORKS),
-        ("works@w2.year", None, WORKS),
-        ("works@w2.month", 13, WORKS),
-        ("works@w1.date", day("2020-01-01"), WORKS),
-        ("purchase.closing_date", None, ROLL | WORKS | {"tied@i1"}),
-        ("purchase.closing_date", day("0999-01-01"), ROLL | WORKS | {"tied@i1"}),
-        ("other_income@i1.lease", "e7", {"tied@i1"}),
-    ],
-)
-def test_what_an_issue_stands_in_the_way_of(path: str, value: Any, blocked: set[str]) -> None:
-    plan = compile_deal(changed(fullest(), {path: value}))
-    assert unknown_facts(plan) == set(plan.blocked) == blocked
-    assert all(issue in plan.issues for issue in plan.blocked.values())
-    assert unknown_inputs(plan) == set()
-
-
-@pytest.mark.parametrize("rent", ["spaces@s1.market_rent.of", "leases@e1.rent.of"])
-def test_an_area_blocks_the_rents_that_are_given_by_area(rent: str) -> None:
-    plan = compile_deal(changed(fullest(), {rent: "area", "spaces@s1.area": None}))
-    assert set(plan.blocked) == ROLL | {"market_total", "area"}
-
-
-def test_works_alone_need_the_closing_date_for_themselves() -> None:
-    base = changed(replace(deal(), works=fullest().works), {"purchase.closing_date": None})
-    assert set(compile_deal(base).blocked) == WORKS
-    undated = replace(
-        base, works=fullest().works[1:], spaces=(space(1.0, Lease("e1", rent=Rent(2.0))),)
-    )
-    assert not compile_deal(undated).blocked
-
-
-def test_without_spaces_there_is_no_roll() -> None:
-    plan = compile_deal(replace(deal(), spaces=()))
-    assert [issue.code for issue in plan.issues] == ["no_spaces"]
-    assert unknown_facts(plan) == set(plan.blocked) == ROLL | COUNTED
-
-
-def test_two_issues_in_one_way_name_the_first() -> None:
-    both = changed(fullest(), {"spaces@s1.count": None, "spaces@s2.count": -1})
-    assert compile_deal(both).blocked["units"].path == "spaces@s1.count"
-
-
 # Issues that leave the figures
 
 
@@ -280,3 +160,107 @@ def test_an_empty_deal_compiles() -> None:
     plan = compile_deal(Deal())
     assert {"purchase.price", "leave.hold", "earn.vacancy", "returns.required"} <= set(plan.blocked)
     assert plan.deal == Deal()
+
+
+# After an edit
+
+
+def assert_same(plan: Plan, fresh: Plan) -> None:
+    """Two plans of one deal hold the same, whatever the one was built on."""
+    assert plan.deal == fresh.deal
+    assert plan.shape == fresh.shape and plan.program is fresh.program
+    assert plan.issues == fresh.issues
+    assert plan.blocked == fresh.blocked
+    for mine, theirs in ((plan.inputs, fresh.inputs), (plan.facts, fresh.facts)):
+        assert mine.keys() == theirs.keys()
+        for name, values in theirs.items():
+            assert np.array_equal(mine[name], values, equal_nan=True), name
+
+
+def edited(base: Deal, random: Random) -> Deal:
+    """One random edit: a number moved, spoiled or cleared, spaces or other items rearranged."""
+    kind = random.choice(["number"] * 4 + ["clear", "spaces", "drop", "closing", "works"])
+    if kind == "spaces":
+        return replace(base, spaces=tuple(random.sample(base.spaces, len(base.spaces))))
+    if kind == "drop":
+        name = random.choice(["spaces", "expenses", "other_income", "loans"])
+        return replace(base, **{name: getattr(base, name)[1:]})
+    if kind == "closing":
+        closing = random.choice([None, day("2026-05-31"), day("2031-01-15"), day("0999-01-01")])
+        return changed(base, {"purchase.closing_date": closing})
+    if kind == "works":
+        return replace(base, works=base.works[1:] if base.works else fullest().works)
+    found = [leaf for leaf in leaves(base) if leaf.value is not None]
+    if kind == "clear":
+        dates = [leaf.path for leaf in found if leaf.input.unit == "date"]
+        return changed(base, {random.choice(dates): None}) if dates else base
+    leaf = random.choice([leaf for leaf in found if leaf.field.kind is float or leaf.field.is_row])
+    factor = random.choice([0.5, 0.9, -3.0])
+    if leaf.field.is_row:
+        return changed(
+            base, {f"{leaf.path}.{year}": factor * leaf.value[year] for year in leaf.value}
+        )
+    return changed(base, {leaf.path: factor * leaf.value - 0.5})
+
+
+@pytest.mark.parametrize("seed", range(5))
+def test_edit_by_edit_or_afresh_a_plan_is_the_same(seed: int) -> None:
+    random = Random(seed)
+    for raw in drawn(8550 + seed, 3):
+        base = deal_from_raw(raw)
+        plan, repaired = compile_deal(base), base
+        for _ in range(6):
+            base = edited(base, random) if random.random() < 0.8 else repaired
+            plan = compile_deal(base, plan)
+            assert_same(plan, compile_deal(base))
+
+
+def test_a_plan_may_be_built_on_that_of_any_other_deal() -> None:
+    plan = compile_deal(Deal())
+    for base in (fullest(), deal(), with_loan(fullest()), Deal(), fullest()):
+        plan = compile_deal(base, plan)
+        assert_same(plan, compile_deal(base))
+
+
+def test_an_edit_elsewhere_takes_the_rent_roll_over() -> None:
+    first = compile_deal(fullest())
+    for changes in ({"leave.hold": 9}, {"earn.vacancy.1": 0.2}, {"leave.exit_yield": -1.0}):
+        later = compile_deal(changed(first.deal, changes), first)
+        assert all(later.facts[name] is first.facts[name] for name in (*KINDS, "units", "area"))
+        assert later.parts.places is first.parts.places
+
+
+def test_an_edit_of_a_space_takes_the_others_over() -> None:
+    first = compile_deal(fullest())
+    other = changed(fullest(), {"spaces@s1.market_rent.amount": 1.0}).spaces[0]
+    later = compile_deal(replace(first.deal, spaces=(other, first.deal.spaces[1])), first)
+    assert later.parts.facts.roll is not None and first.parts.facts.roll is not None
+    assert later.parts.facts.roll[1] is first.parts.facts.roll[1]
+    assert later.facts["market_total"][0] == 1 + 3 * 30
+
+
+def test_the_same_spaces_in_another_tuple_are_the_same_roll() -> None:
+    first = compile_deal(fullest())
+    later = compile_deal(replace(first.deal, spaces=(*first.deal.spaces,)), first)
+    assert later.facts["contract"] is first.facts["contract"]
+    assert_same(later, first)
+
+
+def test_another_closing_date_is_another_roll() -> None:
+    first = compile_deal(fullest())
+    moved = changed(first.deal, {"purchase.closing_date": day("2027-12-01")})
+    later = compile_deal(moved, first)
+    assert_same(later, compile_deal(moved))
+    # The step of 1 January 2028 now falls in the second month.
+    assert later.facts["contract"][:2, 0] == pytest.approx([100, 110])
+
+
+def test_an_area_that_is_needed_and_no_longer() -> None:
+    by_area = changed(fullest(), {"spaces@s2.area": None})
+    blocked = compile_deal(by_area)
+    assert set(blocked.blocked) == {"area"}
+    by_year = changed(by_area, {"expenses@x1.basis": "year"})
+    free = compile_deal(by_year, blocked)
+    assert not free.blocked
+    assert_same(free, compile_deal(by_year))
+    assert_same(compile_deal(by_area, free), blocked)

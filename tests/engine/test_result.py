@@ -459,6 +459,27 @@ def test_one_faulty_input_is_the_reason_of_all_it_takes_away(seed: int) -> None:
                     assert why.issue.path == path or why.issue.code == "weights", (path, place)
 
 
+def test_reasons_of_a_batch_that_kept_only_what_was_wanted() -> None:
+    drivers = {
+        "leave.exit_yield": [[0.08], [0.08], [0.08]],
+        "expenses@x1.amount": [[0.0], [200.0], [0.0]],
+        "earn.growth": [[0.0, 0.0], [0.0, 0.0], [0.2, 0.2]],
+        "returns.extra_on_exit": [[0.01]],
+    }
+    plan = compile_deal(costly())
+    some = evaluate(plan, drivers, wanted=["value", "reference_value"])
+    full = evaluate(plan, drivers)
+    assert set(some.values) == {"value", "reference_value"}
+    for trial in range(3):
+        for key in ("value", "reference_value"):
+            value = full.figure(key, trial=trial)
+            assert some.figure(key, trial=trial) == (None if value is None else near(value))
+            if value is None:
+                assert some.reason(key, trial=trial) == full.reason(key, trial=trial)
+    assert some.reason("value", trial=1).line == "forward_noi_price"
+    assert some.reason("reference_value", trial=2).code == "return_not_above_growth"
+
+
 def test_an_empty_deal_waits_for_what_it_needs() -> None:
     waited = {why.issue.path for *_, why in missing_figures(evaluated(Deal())) if why.issue}
     assert {"purchase.price", "leave.hold", "spaces"} <= waited

@@ -240,7 +240,7 @@ def test_nothing_is_left_over_where_no_piece_is_alive() -> None:
 
 
 def test_a_piece_within_one_month() -> None:
-    row = scatter([Piece("gap", "s1", 4.25, 4.75, 100.0)])["gap"][:, 0].tolist()
+    row = scatter(table_of([Piece("gap", "s1", 4.25, 4.75, 100.0)]))["gap"][:, 0].tolist()
     assert moved(row) == {4: near(50)}
 
 

@@ -7,6 +7,7 @@ the printed figures.
 import math
 
 import numpy as np
+import numpy.typing as npt
 import pytest
 
 from workbench.engine.cash import irr, mirr, npv
@@ -19,8 +20,8 @@ APPENDIX_K = "12 CFR 1026 Appendix K (seen)"
 CENT = 0.005
 
 
-def rate_of(flows: object, times: object = None) -> float:
-    answer = irr(flows, times)  # type: ignore[arg-type]
+def rate_of(flows: npt.ArrayLike, times: npt.ArrayLike | None = None) -> float:
+    answer = irr(flows, times)
     assert answer.rate is not None
     return answer.rate
 

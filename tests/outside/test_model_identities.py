@@ -90,13 +90,14 @@ def test_closed_form_of_the_value(
 def year_factor(required: float, timing: Timing) -> float:
     """A year's rent of 1, at the end of that year."""
     one = 1 + required
-    return {
+    factors: dict[Timing, float] = {
         "year_end": 1.0,
-        "mid_year": one**0.5,
+        "mid_year": math.sqrt(one),
         "year_start": one,
         "month_end": math.fsum(one ** (1 - j / 12) / 12 for j in range(1, 13)),
         "month_start": math.fsum(one ** (1 - j / 12) / 12 for j in range(12)),
-    }[timing]
+    }
+    return factors[timing]
 
 
 @settings(deadline=None)
@@ -137,7 +138,7 @@ def lasting(base: Deal, timing: Timing) -> Deal:
 @pytest.mark.parametrize("timing", TIMINGS)
 def test_the_reference_line_is_flat(timing: Timing) -> None:
     flat = 0
-    for base in random_deals(9300, 30):
+    for base in random_deals(9300, 20):
         plan = compile_deal(lasting(base, timing))
         swept = evaluate(plan, {"leave.hold": np.arange(1.0, 41.0)[:, np.newaxis]})
         reference = swept.figure("reference_value")
@@ -151,7 +152,7 @@ def test_the_reference_line_is_flat(timing: Timing) -> None:
         if reference > 0:
             shares = swept.line("exit_value_share")[:, 0]
             assert shares == pytest.approx(swept.line("reference_share")[:, 0], rel=1e-9, abs=1e-9)
-    assert flat >= 10
+    assert flat >= 6
 
 
 def test_selling_cost_is_what_bends_it() -> None:
@@ -183,11 +184,11 @@ def discounts(base: Deal) -> tuple[list[float], list[float]]:
     return months, later
 
 
-@pytest.mark.parametrize("seed", range(4))
+@pytest.mark.parametrize("seed", range(3))
 def test_tiers_sum_to_the_value(seed: int) -> None:
     """Σ PV(net cash flow) + PV(net exit), though it is computed tier by tier."""
     valued = 0
-    for base in random_deals(9400 + seed, 15):
+    for base in random_deals(9400 + seed, 10):
         result, hold = evaluated(base), base.leave.hold or 0
         if result.figure("value") is None:
             continue
@@ -204,10 +205,10 @@ def test_tiers_sum_to_the_value(seed: int) -> None:
         expected = pytest.approx(math.fsum([*parts, leaving]), rel=0, abs=1e-12 * size)
         assert figure(result, "value") == expected
         assert tiers["in_hand"] + tiers["expected"] + leaving == expected
-    assert valued >= 10
+    assert valued >= 6
 
 
-@pytest.mark.parametrize("seed", range(3))
+@pytest.mark.parametrize("seed", range(2))
 def test_the_margin_is_the_present_value_of_the_flows(seed: int) -> None:
     for base in random_deals(9500 + seed, 15):
         rate = base.returns.required[1]
@@ -239,7 +240,7 @@ def residual(flows: Array, rate: float) -> float:
 @pytest.mark.parametrize("side", ["unlevered", "levered"])
 def test_flows_are_worth_nothing_at_their_internal_rate(side: str) -> None:
     found = 0
-    for base in random_deals(9600, 45):
+    for base in random_deals(9600, 36):
         result = evaluated(base)
         if side == "levered" and not base.loans:
             continue
@@ -248,7 +249,7 @@ def test_flows_are_worth_nothing_at_their_internal_rate(side: str) -> None:
             continue
         found += 1
         assert residual(result.line(f"{side}_flows")[0], rate) <= 8
-    assert found >= 15
+    assert found >= 12
 
 
 def test_a_rate_that_is_off_is_noticed() -> None:
@@ -290,7 +291,7 @@ def test_principal_sums_to_the_loan(
 
 
 def test_sources_are_uses() -> None:
-    for base in random_deals(9700, 40):
+    for base in random_deals(9700, 20):
         result, closing = evaluated(base), base.purchase
         price = closing.price or 0.0
         costs = [
@@ -307,7 +308,7 @@ def test_sources_are_uses() -> None:
 
 
 def test_the_value_does_not_know_the_loan() -> None:
-    for base in random_deals(9800, 30):
+    for base in random_deals(9800, 12):
         with_debt, without = evaluated(base), evaluated(replace(base, loans=()))
         for key in ("value", "margin", "exit_value_share", "irr_unlevered", "value_in_hand"):
             assert with_debt.figure(key) == without.figure(key)
@@ -344,7 +345,7 @@ def separable(base: Deal, method: ExitMethod) -> Deal:
 def test_values_of_parts_add_up(method: ExitMethod) -> None:
     """Two spaces are worth what each is worth alone."""
     added = 0
-    for base in random_deals(9900, 40):
+    for base in random_deals(9900, 24):
         if len(base.spaces) < 2:
             continue
         whole = separable(base, method)
@@ -354,4 +355,4 @@ def test_values_of_parts_add_up(method: ExitMethod) -> None:
         added += 1
         total = math.fsum(part for part in parts if part is not None)
         assert figure(evaluated(whole), "value") == pytest.approx(total, rel=1e-11)
-    assert added >= 8
+    assert added >= 5

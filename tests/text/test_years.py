@@ -2,13 +2,14 @@
 
 from datetime import date
 
-from workbench.text.years import months_after, year_span
+from workbench.deal.dates import add_months
+from workbench.text.years import year_span
 
 
 def test_days_past_a_months_end_become_its_last_day() -> None:
-    assert months_after(date(2024, 1, 31), 1) == date(2024, 2, 29)
-    assert months_after(date(2024, 2, 29), 12) == date(2025, 2, 28)
-    assert months_after(date(2025, 11, 30), 3) == date(2026, 2, 28)
+    assert add_months(date(2024, 1, 31), 1) == date(2024, 2, 29)
+    assert add_months(date(2024, 2, 29), 12) == date(2025, 2, 28)
+    assert add_months(date(2025, 11, 30), 3) == date(2026, 2, 28)
 
 
 def test_a_deal_year_ends_on_the_day_before_the_next_begins() -> None:

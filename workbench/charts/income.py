@@ -116,5 +116,8 @@ def _words(figures: IncomeFigures) -> str:
     said += f"; net cash flow before debt is lowest in year {least[0] + 1}, at {money(least[1])}; "
     if not any(amount for _, amount in paid):
         return f"{said}there is no debt service."
-    most = max(paid, key=lambda one: one[1])
-    return f"{said}debt service is highest in year {most[0] + 1}, at {money(most[1])}."
+    most = money(max(amount for _, amount in paid))
+    first = next(place for place, amount in paid if money(amount) == most)
+    if len({money(amount) for _, amount in paid}) == 1:
+        return f"{said}debt service is {most} a year."
+    return f"{said}debt service is highest in year {first + 1}, at {most}."

@@ -3,14 +3,14 @@
 import argparse
 import sys
 from contextlib import suppress
-from dataclasses import replace
 from pathlib import Path
 
 from workbench.commands.terms import add_deal, open_deal, say_fault, say_issues, shown_name
+from workbench.engine.plan import compile_deal
+from workbench.engine.result import evaluate
 from workbench.files.atomic import write_atomically
 from workbench.files.faults import Fault, UnreadableError
 from workbench.report.memo import build
-from workbench.report.record import record_of
 from workbench.text.locale import DEFAULT, find_locale
 
 SUMMARY = "write the purchase memo of a deal as PDF"
@@ -29,10 +29,8 @@ def run(arguments: argparse.Namespace) -> int:
     if _same_file(arguments.deal, arguments.out):
         fault = Fault("", "this is the deal file; name another file for the memo")
         return say_fault(arguments.out, UnreadableError(fault))
-    document = build(deal, record_of(deal), find_locale(deal.conventions.locale) or DEFAULT)
-    if arguments.paper:
-        document = replace(document, paper=arguments.paper)
-    drawn = draw(document)
+    locale = find_locale(deal.conventions.locale) or DEFAULT
+    drawn = draw(build(evaluate(compile_deal(deal)), locale, arguments.paper))
     try:
         write_atomically(arguments.out, drawn.pdf)
     except OSError as error:

@@ -7,22 +7,12 @@ that has passed, so that a day in mid-month divides the month pro rata by days.
 
 import datetime
 from bisect import bisect_right
-from calendar import monthrange
 from functools import lru_cache
 
+from workbench.deal.dates import add_months
 from workbench.deal.inputs import YEARS
 
 MONTHS = 12 * YEARS
-
-
-def add_months(day: datetime.date, months: int) -> datetime.date:
-    """The same day so many months later, clipped to the month's last day.
-
-    >>> add_months(datetime.date(2027, 1, 31), 1)
-    datetime.date(2027, 2, 28)
-    """
-    year, month = divmod(day.year * 12 + day.month - 1 + months, 12)
-    return datetime.date(year, month + 1, min(day.day, monthrange(year, month + 1)[1]))
 
 
 @lru_cache(maxsize=16)

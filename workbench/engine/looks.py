@@ -68,7 +68,9 @@ def before(row: Floats, first: Floats | float) -> Floats:
 
 def on_dates(months: Floats, first: Floats | float) -> Floats:
     """`first` at closing, then each month's figure at its end."""
-    trials = months.shape[1] if isinstance(first, float) else max(len(first), months.shape[1])
+    trials = months.shape[1]
+    if not isinstance(first, float | int):
+        trials = max(trials, len(first))
     out = np.empty((len(months) + 1, trials))
     out[0] = first
     out[1:] = months
@@ -77,11 +79,10 @@ def on_dates(months: Floats, first: Floats | float) -> Floats:
 
 def at_year(row: Floats, year: Floats | float) -> Floats:
     """The cell of a year, 1 the first; not a number where the year is not one of the row."""
-    if isinstance(year, float):
-        return row[int(year) - 1]
-    if len(year) == 1:
-        one = float(year[0])
-        return row[int(one) - 1] if 1 <= one <= len(row) else np.full(row.shape[1], np.nan)
+    if isinstance(year, float | int) or len(year) == 1:
+        one = float(year if isinstance(year, float | int) else year[0])
+        cell: Floats = row[int(one) - 1] if 1 <= one <= len(row) else np.full(row.shape[1], np.nan)
+        return cell
     valid = (year >= 1) & (year <= len(row))
     position = np.where(valid, year, 1).astype(np.int64) - 1
     wide_row = np.broadcast_to(row, (len(row), len(year)))

@@ -15,8 +15,9 @@ from typing import Literal, TypeAlias
 import numpy as np
 from numpy.typing import NDArray
 
+from workbench.deal.dates import add_months
 from workbench.deal.earn import Lease, Rent, Space
-from workbench.engine.calendar import MONTHS, add_months, month_starts, position
+from workbench.engine.calendar import MONTHS, month_starts, position
 
 Floats: TypeAlias = NDArray[np.float64]
 Kind: TypeAlias = Literal["contract", "free", "undated", "market", "gap", "let", "penalty"]

@@ -14,7 +14,7 @@ from workbench.files.adapter import deal_adapter
 from workbench.files.atomic import write_atomically
 from workbench.files.faults import Fault, UnreadableError, system_fault
 from workbench.files.migrations import Raw, migrate
-from workbench.files.refusals import odd_years, refusals
+from workbench.files.refusals import misspelt, refusals
 from workbench.files.strict_json import parse
 
 
@@ -44,7 +44,7 @@ def deal_from_raw(raw: Raw) -> Deal:
         deal = cast(Deal, deal_adapter().validate_json(json.dumps(current), strict=True))
     except ValidationError as error:
         raise UnreadableError(*refusals(current, error.errors())) from None
-    faults = [*odd_years(current), *(Fault(*one) for one in misnamed(deal))]
+    faults = [*misspelt(current), *(Fault(*one) for one in misnamed(deal))]
     if faults:
         raise UnreadableError(*faults)
     return deal

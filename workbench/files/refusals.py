@@ -10,8 +10,10 @@ from workbench.files.located import Location, allowed_at, field_at, place_of, wi
 from workbench.text.excerpt import excerpt
 
 _YEAR = re.compile("0|-?[1-9][0-9]*")
+_DATE = re.compile("[0-9]{4}-[0-9]{2}-[0-9]{2}")
 
 _A_YEAR = "a deal year, a whole number from 1"
+_A_DATE = "a date like 2027-01-31"
 _NOUNS = {
     "float_type": "a number",
     "finite_number": "a number that a deal can hold",
@@ -20,11 +22,9 @@ _NOUNS = {
     "int_parsing_size": _A_YEAR,
     "string_type": "a text",
     "bool_type": "true or false",
-    "date_type": "a date like 2027-01-31",
-    "date_from_datetime_parsing": "a date like 2027-01-31",
-    "date_parsing": "a date like 2027-01-31",
+    "date_type": _A_DATE,
+    "date_parsing": _A_DATE,
     "tuple_type": "a list in brackets",
-    "mapping_type": "an object in braces",
     "dict_type": "an object in braces",
     "dataclass_type": "an object in braces",
 }
@@ -54,24 +54,40 @@ def refusals(raw: Any, errors: Sequence[Mapping[str, Any]]) -> Iterator[Fault]:
         yield Fault(place_of(raw, location), sentence)
 
 
-def odd_years(raw: Any, location: Location = ()) -> Iterator[Fault]:
-    """Years written in a second way, as `01`: beside `1` one of the two would be lost."""
+def misspelt(raw: Any) -> Iterator[Fault]:
+    """Years and dates in a second spelling, of which pydantic takes some.
+
+    A year `01` beside `1` would lose one of the two, and a date `"86400"` would be seconds.
+    """
+    for location, sentence in _misspelt(raw, ()):
+        yield Fault(place_of(raw, location), sentence)
+
+
+def _misspelt(raw: Any, location: Location) -> Iterator[tuple[Location, str]]:
     if isinstance(raw, dict):
         field = field_at(location)
-        if field is None or not field.is_row:
+        if field is not None and field.is_row:
+            odd = (key for key in raw if _YEAR.fullmatch(key) is None)
+            yield from ((location, f"{_shown(key)} is not {_A_YEAR}, like 1 or 12") for key in odd)
+        else:
             for key, held in raw.items():
-                yield from odd_years(held, (*location, key))
-            return
-        for key in raw:
-            if _YEAR.fullmatch(key) is None:
-                sentence = f"{_shown(key)} is not how a deal year is written; write it like 1 or 12"
-                yield Fault(place_of(raw, location), sentence)
+                yield from _misspelt(held, (*location, key))
     elif isinstance(raw, list):
         for position, held in enumerate(raw):
-            yield from odd_years(held, (*location, position))
+            yield from _misspelt(held, (*location, position))
+    elif isinstance(raw, str) and _DATE.fullmatch(raw) is None and _is_date(location):
+        yield location, f"{_shown(raw)} is not {_A_DATE}"
+
+
+def _is_date(location: Location) -> bool:
+    field = field_at(location)
+    return field is not None and field.input is not None and field.input.unit == "date"
 
 
 def _noun(error: Mapping[str, Any]) -> str:
+    value = error["input"]
+    if error["type"] == "int_type" and isinstance(value, float) and value.is_integer():
+        return "written as a whole number, without a decimal point"
     message = str(error["msg"]).removeprefix("Input should be ")
     if error["type"] == "literal_error":
         return "one of " + message.replace("'", "").replace(" or ", ", ")
@@ -79,4 +95,4 @@ def _noun(error: Mapping[str, Any]) -> str:
 
 
 def _shown(value: Any) -> str:
-    return excerpt(json.dumps(value, ensure_ascii=False, default=str))
+    return excerpt(json.dumps(value, ensure_ascii=False))

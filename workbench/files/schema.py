@@ -8,7 +8,7 @@ from pathlib import Path
 from typing import Any
 
 from workbench.deal.deal import ID_LETTERS, SCHEMA
-from workbench.deal.inputs import YEARS, Field, Input, declared
+from workbench.deal.inputs import DAYS, YEARS, Field, Input, declared
 from workbench.files.adapter import deal_adapter, record_classes
 from workbench.places import resources
 
@@ -67,14 +67,17 @@ def _words(mark: Input, field: Field) -> str:
     words.append(f"Unit: {mark.unit}.")
     if mark.unit == "text":
         words.append(f"At most {mark.high:,.0f} characters." if mark.high else "")
-    elif mark.low is not None and mark.high is not None:
-        words.append(
-            f"Allowed: {mark.low:.16g} to {mark.high:.16g}; checked, but a file with a "
-            "value outside still opens."
-        )
+    elif mark.unit == "date":
+        words.append(_allowed(*DAYS))
+    elif mark.low is not None:
+        words.append(_allowed(f"{mark.low:.16g}", f"{mark.high:.16g}"))
     if mark.needed:
         words.append("Has no default.")
     return " ".join(word for word in words if word)
+
+
+def _allowed(low: object, high: object) -> str:
+    return f"Allowed: {low} to {high}; checked, but a file with a value outside still opens."
 
 
 def _describe_ids(schema: dict[str, Any]) -> None:

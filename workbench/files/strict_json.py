@@ -16,9 +16,6 @@ DEEPEST = 60
 _DIGITS = 300
 """The most digits of a whole number; a float reaches about as far."""
 
-_WHOLE = 1e15
-"""Up to here a number written `10.0` is the whole number 10, as in the JSON Schema."""
-
 
 def parse(text: str) -> Any:
     """Plain data. Raises UnreadableError with the place of each fault."""
@@ -79,11 +76,9 @@ def _whole(digits: str) -> int | _Mark:
     return int(digits) if len(digits) <= _DIGITS else _not_held(digits)
 
 
-def _decimal(text: str) -> float | int | _Mark:
+def _decimal(text: str) -> float | _Mark:
     number = float(text)
-    if not isfinite(number):
-        return _not_held(text)
-    return int(number) if number.is_integer() and abs(number) < _WHOLE else number
+    return number if isfinite(number) else _not_held(text)
 
 
 def _unfit(raw: Any, location: Location) -> Iterator[tuple[Location, str]]:

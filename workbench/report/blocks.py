@@ -41,17 +41,33 @@ def section_slabs(section: Section, room: float, tallest: float) -> tuple[Slab, 
 def column_slabs(blocks: tuple[Block, ...], room: float, tallest: float) -> tuple[Slab, ...]:
     """Blocks one under the other."""
     slabs: list[Slab] = []
-    for place, block in enumerate(blocks):
+    before: Block | None = None
+    for block, following in zip(blocks, (*blocks[1:], None), strict=True):
         first, *others = _block_slabs(block, room, tallest)
-        slabs += [replace(first, space=_above(block) if place else 0.0), *others]
+        cut = [replace(first, space=_above(block, before)), *others]
+        if _leads_on(before, block, following):
+            cut[-1] = replace(cut[-1], keep_next=True)
+        slabs += cut
+        before = block
     return tuple(slabs)
 
 
-def _above(block: Block) -> float:
-    """The space over a block that is not the first."""
+def _above(block: Block, before: Block | None) -> float:
+    """The space over a block; a title within a section stands near to what follows it."""
+    if before is None:
+        return 0.0
+    if isinstance(before, Subheading):
+        return sheet.UNDER_SUBHEADING
     if isinstance(block, Paragraph):
         return sheet.PARAGRAPH_SPACE
     return sheet.SUBHEADING_SPACE if isinstance(block, Subheading) else sheet.BLOCK_SPACE
+
+
+def _leads_on(before: Block | None, block: Block, following: Block | None) -> bool:
+    """Whether a paragraph does no more than introduce the table or picture after it."""
+    opens = before is None or isinstance(before, Subheading)
+    alone = following is None or isinstance(following, Paragraph)
+    return isinstance(block, Paragraph) and opens and not alone
 
 
 def _block_slabs(block: Block, room: float, tallest: float) -> tuple[Slab, ...]:

@@ -1,6 +1,7 @@
 """Sources and uses: what is paid at closing, and where it comes from."""
 
 from workbench.report.document import Column, Section, SideBySide, Table
+from workbench.report.names import item_title
 from workbench.report.readings import Readings
 from workbench.report.voice import Voice
 from workbench.text import numbers
@@ -17,10 +18,8 @@ _USES = (
 
 def closing_section(read: Readings, voice: Voice) -> Section:
     """Two tables with the same total."""
-    sources = [
-        (loan.name or f"Loan {loan.id}", read.number(f"loans.{loan.id}.amount"))
-        for loan in voice.deal.loans
-    ]
+    lent = read.loan_amounts()
+    sources = [(item_title(loan, "loans"), lent.get(loan.id)) for loan in voice.deal.loans]
     sources.append(("Deposits taken over", read.number("sources_uses.sources.deposits")))
     sources.append(("Cash to close", read.number("sources_uses.sources.equity")))
     uses = [(label, read.number(f"sources_uses.uses.{key}")) for key, label in _USES]

@@ -65,8 +65,8 @@ class Table:
     """Whether it is set smaller, for many columns."""
     slanted: frozenset[tuple[int, int]] = frozenset()
     """Rows and columns of cells set slanting and paler."""
-    in_groups: bool = False
-    """Whether the rows down to each strong one are kept on one page."""
+    whole: bool = False
+    """Whether all its rows are kept on one page where they fit one."""
 
 
 @dataclass(frozen=True)

@@ -29,16 +29,22 @@ def fitted(table: Table, room: float) -> tuple[float, ...]:
 
 
 def _natural(table: Table, place: int) -> float:
-    """The width of the widest cell of a column, or of the longest word of its title."""
+    """The width of the widest cell of a column, or of its title on two lines."""
     size = sheet.FINE if table.fine else sheet.CELL
     title_size = sheet.FINE_NOTE if table.fine else sheet.NOTE
-    words = printable(table.columns[place].title).split()
-    titles = [width(word, title_size) for word in words]
+    title = _two_lines(printable(table.columns[place].title), title_size)
     cells = [
         max(width(line, size, _weight(table, number)) for line in printable(row[place]).split("\n"))
         for number, row in enumerate(table.rows)
     ]
-    return max((*titles, *cells), default=0.0) + 0.01
+    return max((title, *cells)) + 0.01
+
+
+def _two_lines(title: str, size: float) -> float:
+    """The least width that a title needs on no more than two lines."""
+    words = title.split()
+    breaks = [(" ".join(words[:at]), " ".join(words[at:])) for at in range(len(words) + 1)]
+    return min(max(width(line, size) for line in pair) for pair in breaks)
 
 
 def _weight(table: Table, number: int) -> Weight:

@@ -24,7 +24,6 @@ def exit_section(years: Years) -> Section:
         tuple((step.label, step.text) for step in steps),
         frozenset(number for number, step in enumerate(steps) if step.strong),
         notes=tuple(step.note for step in steps),
-        in_groups=True,
     )
     if years.result.figure("exit_price") is not None:
         return Section(_TITLE, (table,))
@@ -42,10 +41,13 @@ def _prices(sale: Sale) -> list[Step]:
     steps: list[Step] = []
     weighed: list[str] = []
     for part, price in zip(deal.leave.blend, prices, strict=True):
-        steps += [_headed(part.method, _weight(sale, part)), *method_steps(sale, part.method, price)]
+        steps += [
+            _headed(part.method, _weight(sale, part)),
+            *method_steps(sale, part.method, price),
+        ]
         weighed.append(f"{_weight(sale, part)} × {voice.money(price)}")
-    price = sale.amount("Exit price, blended", "exit_price", note=" + ".join(weighed), strong=True)
-    return [*steps, price]
+    note = " + ".join(weighed)
+    return [*steps, sale.amount("Exit price, blended", "exit_price", note=note, strong=True)]
 
 
 def _headed(method: str, weight: str) -> Step:

@@ -4,8 +4,7 @@ from collections.abc import Iterator
 from dataclasses import dataclass
 from math import isfinite
 
-from workbench.deal.inputs import YEARS
-from workbench.deal.inputs import at_year as in_year
+from workbench.deal.inputs import YEARS, at_year
 from workbench.deal.leave import ExitMethod
 from workbench.deal.paths import field_of, get
 from workbench.engine import formula as f
@@ -115,7 +114,7 @@ def _perpetuity(sale: Sale, method: ExitMethod) -> Iterator[Step]:
     growth = result.declared["lasting_growth"]
     text = voice.rate(result.figure("lasting_growth"))
     yield Step(growth.label, text, growth.definition)
-    last = in_year(voice.deal.returns.required, YEARS)
+    last = at_year(voice.deal.returns.required, YEARS)
     yield Step(f"Required return of year {YEARS} and after", voice.rate(last))
     yield Step(
         sale.years.label("lasting_value"),

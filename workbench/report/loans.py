@@ -3,6 +3,7 @@
 from workbench.charts.loan import LoanFigures, draw_loan
 from workbench.deal.borrow import Loan
 from workbench.report.document import Block, Figure, Section, Subheading, plain
+from workbench.report.names import item_title
 from workbench.report.readings import Readings
 from workbench.report.years import Amounts, Row, Years
 
@@ -17,10 +18,13 @@ def loan_section(years: Years, read: Readings, column: float) -> tuple[Section, 
     picture = draw_loan(_figures(years, read), column, *_CHART)
     blocks: list[Block] = [Subheading("Loan under price"), Figure(picture, picture.words)]
     for loan in loans:
-        blocks += [Subheading(loan.name or f"Loan {loan.id}"), years.table(_rows(years, loan))]
-    blocks += [Subheading("Cover and debt yield"), years.table(_cover(years, len(loans) > 1))]
-    note = "Debt service is interest and principal; what is repaid at a maturity stands apart."
-    return (Section("Loans by year", (*blocks, plain(note, "small"))),)
+        blocks += [Subheading(item_title(loan, "loans")), years.table(_rows(years, loan))]
+    blocks += [
+        Subheading("Cover and debt yield"),
+        plain("Debt service is interest and principal, without repayment at a maturity.", "small"),
+        years.table(_cover(years, len(loans) > 1)),
+    ]
+    return (Section("Loans by year", tuple(blocks)),)
 
 
 def _figures(years: Years, read: Readings) -> LoanFigures:

@@ -60,6 +60,10 @@ class Readings:
             courses.append(WallCourse(int(row["year"]), float(in_hand), float(expected)))
         return tuple(courses)
 
+    def loan_amounts(self) -> Mapping[str, float | None]:
+        """What each loan comes to, by its id."""
+        return {loan["id"]: loan.get("amount") for loan in self.figures.get("loans") or ()}
+
     def lowest(self, path: str) -> tuple[float, int] | None:
         """The lowest figure of a row and its year."""
         given = [(v, year) for year, v in enumerate(self.row(path), start=1) if v is not None]

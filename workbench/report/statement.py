@@ -3,7 +3,9 @@
 from workbench.charts.income import IncomeFigures, draw_income
 from workbench.engine.figures import NOT_YET, STATEMENT
 from workbench.report.document import Block, Figure, Section, Subheading, plain
+from workbench.report.names import item_title
 from workbench.report.years import Row, Years
+from workbench.text.locale import NO_BREAK
 
 _SUMS = frozenset(
     {
@@ -14,6 +16,7 @@ _SUMS = frozenset(
         "cash_flow_after_debt",
     }
 )
+_INDENT = 2 * NO_BREAK
 _CHART = (150.0, 7.6)
 """Height of the picture and size of its letters."""
 
@@ -51,7 +54,7 @@ def statement_rows(years: Years) -> list[Row]:
     for key in order:
         if key == "operating_expenses":
             rows += [
-                Row(item.name or f"Expense {item.id}", years.line(f"expense@{item.id}"))
+                Row(item_title(item, "expenses"), years.line(f"expense@{item.id}"))
                 for item in years.voice.deal.expenses
             ]
         rows.append(years.row(key, strong=key in _SUMS))
@@ -74,7 +77,7 @@ def _order(years: Years) -> list[str]:
 def _parts_of_other_income(years: Years) -> list[Row]:
     items = years.voice.deal.other_income
     return [
-        Row(f"of it {item.name or item.id}", years.line(f"other_income@{item.id}"))
+        Row(f"{_INDENT}{item_title(item)}", years.line(f"other_income@{item.id}"))
         for item in items
         if len(items) > 1
     ]

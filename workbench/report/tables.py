@@ -14,6 +14,9 @@ from workbench.report.slabs import Slab
 
 _WHOLE_ROW = 6
 """Rows of up to so many lines are kept on one page."""
+_WITH_SUM = 3
+"""So many rows above a sum are kept on its page."""
+_OVER_NOTE = 0.8
 
 
 @dataclass(frozen=True)
@@ -61,10 +64,15 @@ def table_slabs(table: Table, room: float) -> tuple[Slab, ...]:
 
 
 def _is_kept(table: Table, number: int) -> bool:
-    """Whether a row stands on the page of the next one: no total stands alone."""
-    last = number == len(table.rows) - 1
-    in_group = table.in_groups and number not in table.strong
-    return not last and (in_group or number + 1 in table.strong)
+    """Whether a row stands on the page of the next one.
+
+    No first or last row is alone on a page, and what stands just above a sum goes with it.
+    """
+    last = len(table.rows) - 1
+    if number == last or table.whole or number in (0, last - 1):
+        return number < last
+    near = range(number + 1, number + (2 if number in table.strong else _WITH_SUM + 1))
+    return not table.strong.isdisjoint(near)
 
 
 def _header(setting: _Setting) -> tuple[Slab, ...]:
@@ -101,23 +109,31 @@ def _row(setting: _Setting, number: int) -> list[Slab]:
         weight: Weight = "italic" if slanted else "bold" if strong else "regular"
         lines = wrap_short(printable(text), size, wide, most, weight)
         cells.append(_Cell(column, lines, weight, "muted" if slanted else "ink"))
-    slabs = _lines(setting, cells, size)
+    note = table.notes[number] if table.notes else ""
+    slabs = _lines(setting, cells, size, below=0.0 if note else setting.pad)
     if number:
         rule = Line(0, 0, setting.room, 0, "ink" if strong else "rule", 0.6 if strong else 0.4)
         slabs[0] = replace(slabs[0], shapes=(*slabs[0].shapes, rule))
-    note = table.notes[number] if table.notes else ""
     return _with_note(setting, slabs, note) if note else slabs
 
 
-def _lines(setting: _Setting, cells: list[_Cell], size: float) -> list[Slab]:
-    """One slab for each line of the row's longest cell."""
+def _lines(
+    setting: _Setting,
+    cells: list[_Cell],
+    size: float,
+    above: float | None = None,
+    below: float | None = None,
+) -> list[Slab]:
+    """One slab for each line of the row's longest cell, with room above and below them all."""
+    over = setting.pad if above is None else above
+    under = setting.pad if below is None else below
     tall = size * LEADING
     most = max(len(cell.lines) for cell in cells)
     slabs: list[Slab] = []
     for place in range(most):
-        above = setting.pad if place == 0 else 0.0
-        below = setting.pad if place == most - 1 else 0.0
-        baseline = above + (tall + CAP_HEIGHT * size) / 2
+        top = over if place == 0 else 0.0
+        bottom = under if place == most - 1 else 0.0
+        baseline = top + (tall + CAP_HEIGHT * size) / 2
         texts: list[Shape] = []
         left = 0.0
         for cell, wide in zip(cells, setting.widths, strict=True):
@@ -129,7 +145,7 @@ def _lines(setting: _Setting, cells: list[_Cell], size: float) -> list[Slab]:
                 texts.append(Text(x, baseline, line, size, anchor, cell.weight, cell.colour))
             left += wide + setting.gap
         keep = place < most - 1 and (most <= _WHOLE_ROW or place in (0, most - 2))
-        slabs.append(Slab(above + tall + below, tuple(texts), keep_next=keep))
+        slabs.append(Slab(top + tall + bottom, tuple(texts), keep_next=keep))
     return slabs
 
 
@@ -138,4 +154,8 @@ def _with_note(setting: _Setting, row: list[Slab], note: str) -> list[Slab]:
     size = sheet.FINE_NOTE if setting.table.fine else sheet.NOTE
     cell = _Cell(Column(""), wrap(printable(note), size, setting.room), "regular", "muted")
     whole = replace(setting, widths=(setting.room,))
-    return [*row[:-1], replace(row[-1], keep_next=True), *_lines(whole, [cell], size)]
+    return [
+        *row[:-1],
+        replace(row[-1], keep_next=True),
+        *_lines(whole, [cell], size, above=_OVER_NOTE),
+    ]

@@ -7,10 +7,10 @@ from typing import Any
 
 from workbench.deal.checks import is_fraction
 from workbench.deal.inputs import Field, Input
+from workbench.report.names import one_line
 from workbench.report.voice import Voice
 from workbench.text import numbers
 from workbench.text.choices import choice
-from workbench.text.labels import item_name
 
 MOST_DECIMALS = 4
 
@@ -26,6 +26,8 @@ def value_text(voice: Voice, owner: Any, field: Field, value: Any) -> str:
 
 
 def _one(voice: Voice, name: str, unit: str, value: Any) -> str:
+    if name == "month":  # counted in months, but one of a year and not a length of time
+        return str(value)
     match unit:
         case "choice":
             return choice(name, value)
@@ -34,11 +36,18 @@ def _one(voice: Voice, name: str, unit: str, value: Any) -> str:
         case "date":
             return voice.day(value)
         case "reference":
-            return item_name(voice.deal, f"leases@{value}")
+            return _lease_name(voice, str(value))
         case "text":
             return str(value)
         case _:
             return amount_text(voice, unit, value)
+
+
+def _lease_name(voice: Voice, identity: str) -> str:
+    """The tenant of a lease, or the lease by its id."""
+    leases = (lease for space in voice.deal.spaces for lease in space.leases)
+    tenants = (one_line(lease.tenant) for lease in leases if lease.id == identity)
+    return next(tenants, "") or f"lease {identity}"
 
 
 def amount_text(voice: Voice, unit: str, value: float, decimals: int | None = None) -> str:
@@ -68,7 +77,7 @@ def row_text(voice: Voice, declared: Input, row: Mapping[int, float]) -> str:
     if len(values) == 1:
         return values[0][1]
     if len(values) == 2:
-        return f"{values[0][1]}, from year {values[1][0]} {values[1][1]}"
+        return f"{values[0][1]}; from year {values[1][0]}: {values[1][1]}"
     low, high = min(row.values()), max(row.values())
     ends = (amount_text(voice, declared.unit, value) for value in (low, high))
     return "{} to {} by year".format(*ends)

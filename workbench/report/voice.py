@@ -70,6 +70,9 @@ class Voice:
     def count(self, value: float | None) -> str:
         return numbers.number(value, self.locale)
 
+    def decimal(self, value: float | None, decimals: int) -> str:
+        return numbers.number(value, self.locale, decimals)
+
     def share(self, value: float | None) -> str:
         return numbers.percent(value, self.locale)
 

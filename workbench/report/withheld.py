@@ -9,7 +9,7 @@ from workbench.deal.earn import Space
 WITHHELD = "name withheld"
 
 _RESIDENTIAL = re.compile(
-    r"\b(flat|apartment|residen|dwelling|studio|house|home|bedroom|room|household|condo"
+    r"\b(flat|apartment|residen|dwelling|studio|house|home|bedroom|condo"
     r"|maisonette|bedsit|duplex|villa|cottage|bungalow|lodging|loft|penthouse|tenement"
     r"|appartement|logement|piso|vivienda|habita|appartamento|alloggio|abita|apartamento"
     r"|mieszkan|lägenhet|lagenhet|bostad|διαμ[εέ]ρισμα|κατοικ[ιί])"

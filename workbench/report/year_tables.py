@@ -11,16 +11,21 @@ from workbench.report.tables import table_slabs
 
 _MOST_LABEL = 0.32
 """The part of the width that labels may take before they are broken into lines."""
+_LEAST_LABEL = 0.2
+"""The same where it makes for fewer tables."""
 _MOST_COLUMN = 62.0
 """Columns of few years are not pulled apart over the whole page."""
+_WHOLE = 14
+"""A table of up to so many rows is kept on one page."""
 
 
 def year_table_slabs(table: YearTable, room: float) -> tuple[Slab, ...]:
     """The years in even parts, each with its own heading; labels and columns line up."""
-    label = min(_label_width(table), _MOST_LABEL * room)
     natural = _column_width(table)
-    across = max(1, int((room - label) / (natural + sheet.FINE_GAP)))
-    parts = ceil(len(table.years) / across)
+    widest = _label_width(table)
+    choices = [min(widest, share * room) for share in (_MOST_LABEL, _LEAST_LABEL)]
+    label = min(choices, key=lambda wide: _parts(table, room - wide, natural))
+    parts = _parts(table, room - label, natural)
     across = ceil(len(table.years) / parts)
     column = min((room - label) / across - sheet.FINE_GAP, max(natural, _MOST_COLUMN))
     slabs: list[Slab] = []
@@ -31,6 +36,12 @@ def year_table_slabs(table: YearTable, room: float) -> tuple[Slab, ...]:
         space = sheet.BLOCK_SPACE if first else 0.0
         slabs += [replace(part[0], space=space), *part[1:]]
     return tuple(slabs)
+
+
+def _parts(table: YearTable, room: float, column: float) -> int:
+    """How many tables it takes."""
+    across = max(1, int(room / (column + sheet.FINE_GAP)))
+    return ceil(len(table.years) / across)
 
 
 def _part(table: YearTable, places: range, label: float, column: float) -> Table:
@@ -48,7 +59,7 @@ def _part(table: YearTable, places: range, label: float, column: float) -> Table
             for number, line in enumerate(table.lines)
             for place in line.following & set(places)
         ),
-        in_groups=True,
+        whole=len(table.lines) <= _WHOLE,
     )
 
 

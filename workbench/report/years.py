@@ -11,23 +11,21 @@ from workbench.report.voice import Voice
 from workbench.text import numbers
 from workbench.text.years import month_and_year, year_span
 
-Unit: TypeAlias = Literal["money", "fraction", "multiple", "index"]
+Unit: TypeAlias = Literal["money", "fraction", "multiple"]
 Amounts: TypeAlias = tuple[float | None, ...]
 
 _LONGEST = 10
 """Characters of an amount in a column of a year; above it the table is in thousands."""
-_TOTAL = "all years"
 
 
 @dataclass(frozen=True)
 class Row:
-    """A row of figures by year, and what they add up to where that is said."""
+    """A row of figures by year."""
 
     label: str
     values: Amounts
     unit: Unit = "money"
     strong: bool = False
-    total: float | None = None
 
 
 @dataclass(frozen=True)
@@ -65,19 +63,15 @@ class Years:
 
     def table(self, rows: Sequence[Row]) -> YearTable:
         """The rows as a table, amounts in units or, where they are long, in thousands."""
-        amounts = [one for row in rows if row.unit == "money" for one in (*row.values, row.total)]
+        amounts = [value for row in rows if row.unit == "money" for value in row.values]
         scale = numbers.scale_for(tuple(amounts), self.voice.locale, _LONGEST)
-        summed = any(row.total is not None for row in rows)
         headings = self.headings()
         corner = self.voice.unit(scale) + (", year to" if "\n" in headings[0] else ", year")
-        lines = tuple(self._line(row, scale, summed) for row in rows)
-        return YearTable(corner, (*headings, _TOTAL) if summed else headings, lines)
+        return YearTable(corner, headings, tuple(self._line(row, scale) for row in rows))
 
-    def _line(self, row: Row, scale: numbers.Scale, summed: bool) -> YearLine:
-        cells = [self._cell(value, row.unit, scale) for value in row.values]
-        if summed:
-            cells.append("" if row.total is None else self._cell(row.total, row.unit, scale))
-        return YearLine(row.label, tuple(cells), row.strong)
+    def _line(self, row: Row, scale: numbers.Scale) -> YearLine:
+        cells = tuple(self._cell(value, row.unit, scale) for value in row.values)
+        return YearLine(row.label, cells, row.strong)
 
     def _cell(self, value: float | None, unit: Unit, scale: numbers.Scale) -> str:
         match unit:
@@ -87,4 +81,3 @@ class Years:
                 return self.voice.share(value)
             case "multiple":
                 return self.voice.ratio(value)
-        return numbers.number(value, self.voice.locale, 4)

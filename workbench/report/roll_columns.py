@@ -1,0 +1,158 @@
+"""The columns of the rent roll that a deal has something to say in."""
+
+import datetime
+from collections.abc import Callable, Iterator, Mapping
+from dataclasses import dataclass
+
+from workbench.deal.checks_leases import is_dated
+from workbench.deal.deal import Deal
+from workbench.deal.earn import Lease, Rent, Space
+from workbench.engine.roll import last_day
+from workbench.report.document import Align, Column
+from workbench.report.names import item_title, one_line
+from workbench.report.rents import one_unit, rent_unit, yearly
+from workbench.report.typed import decimals_of
+from workbench.report.voice import Voice
+from workbench.text.numbers import MISSING
+
+_VACANT = "no lease"
+
+
+@dataclass(frozen=True)
+class RollColumn:
+    """A column with what stands in it; `of_space` is said once for each space."""
+
+    column: Column
+    cell: Callable[[Space, Lease | None], str]
+    of_space: bool = False
+    total: str = ""
+
+
+def roll_columns(voice: Voice) -> tuple[RollColumn, ...]:
+    """From left to right."""
+    return (*_space_columns(voice), *_lease_columns(voice), *_rent_columns(voice))
+
+
+def _space_columns(voice: Voice) -> Iterator[RollColumn]:
+    spaces = voice.deal.spaces
+    yield RollColumn(Column("Space", share=1.1), _space_name, total="All spaces")
+    if any(space.count != 1 for space in spaces):
+        units = voice.count(sum(space.count or 0 for space in spaces))
+        yield _fitted("Units", lambda space, _: voice.count(space.count), units)
+    if any(space.area is not None for space in spaces):
+        title = f"Area of one, {voice.area_unit}"
+        areas = [space.area for space in spaces if space.area is not None]
+        decimals = min(decimals_of(voice, "area", areas), 1)
+        yield _fitted(title, lambda space, _: voice.decimal(space.area, decimals))
+
+
+def _lease_columns(voice: Voice) -> Iterator[RollColumn]:
+    leases = [lease for space in voice.deal.spaces for lease in space.leases]
+    yield RollColumn(Column("Tenant", share=1.2), _tenant)
+    days: list[tuple[str, Callable[[Lease], datetime.date | None]]] = [
+        ("Start", lambda lease: lease.start),
+        ("End", lambda lease: lease.end),
+        ("Break", lambda lease: lease.break_date),
+    ]
+    for title, of in days:
+        if any(of(lease) is not None for lease in leases):
+            yield RollColumn(Column(title, fit=True), _day_cell(voice, of))
+
+
+def _day_cell(
+    voice: Voice, of: Callable[[Lease], datetime.date | None]
+) -> Callable[[Space, Lease | None], str]:
+    def cell(space: Space, lease: Lease | None) -> str:
+        day = None if lease is None else of(lease)
+        return "" if day is None else voice.day(day)
+
+    return cell
+
+
+def _rent_columns(voice: Voice) -> Iterator[RollColumn]:
+    spaces = voice.deal.spaces
+    leased = [lease.rent for space in spaces for lease in space.leases]
+    rents = [*leased, *(space.market_rent for space in spaces)]
+    say = _RentWords(voice, one_unit(rents), _decimals(voice, rents))
+    money = voice.unit()
+    passing = [
+        yearly(space, lease.rent)
+        for space in spaces
+        for lease in space.leases
+        if runs_at_closing(voice.deal, lease)
+    ]
+    market = [yearly(space, space.market_rent) for space in spaces]
+    yield RollColumn(say.column("Rent"), lambda _, lease: say.text(lease.rent) if lease else "")
+    yield _fitted(
+        f"Rent a year, {money}",
+        lambda space, lease: voice.money(yearly(space, lease.rent)) if lease else "",
+        _sum(voice, passing),
+        of_space=False,
+    )
+    yield RollColumn(
+        say.column("Market rent"), lambda space, _: say.text(space.market_rent), of_space=True
+    )
+    yield _fitted(
+        f"Market rent a year, {money}",
+        lambda space, _: voice.money(yearly(space, space.market_rent)),
+        _sum(voice, market),
+    )
+
+
+@dataclass(frozen=True)
+class _RentWords:
+    """Rents as entered: bare numbers under one title where all are of one measure and period."""
+
+    voice: Voice
+    unit: Rent | None
+    decimals: Mapping[str, int]
+
+    def column(self, title: str) -> Column:
+        of = "" if self.unit is None else f" {rent_unit(self.voice, self.unit)}"
+        return Column(f"{title}{of}", "right", fit=True)
+
+    def text(self, rent: Rent) -> str:
+        of = rent_unit(self.voice, rent)
+        amount = self.voice.exact(rent.amount, self.decimals.get(of))
+        return amount if self.unit or rent.amount is None else f"{amount}\n{of}"
+
+
+def _decimals(voice: Voice, rents: list[Rent]) -> dict[str, int]:
+    """By measure and period, as many decimals as its rents need to line up."""
+    amounts: dict[str, list[float]] = {}
+    for rent in rents:
+        if rent.amount is not None:
+            amounts.setdefault(rent_unit(voice, rent), []).append(rent.amount)
+    return {of: decimals_of(voice, "money", some) for of, some in amounts.items()}
+
+
+def _fitted(
+    title: str,
+    cell: Callable[[Space, Lease | None], str],
+    total: str = "",
+    of_space: bool = True,
+    align: Align = "right",
+) -> RollColumn:
+    return RollColumn(Column(title, align, fit=True), cell, of_space, total)
+
+
+def _space_name(space: Space, lease: Lease | None) -> str:
+    parts = (item_title(space), one_line(space.use))
+    return ", ".join(part for part in parts if part)
+
+
+def _tenant(space: Space, lease: Lease | None) -> str:
+    return _VACANT if lease is None else one_line(lease.tenant) or MISSING
+
+
+def runs_at_closing(deal: Deal, lease: Lease) -> bool:
+    """Whether rent is paid under a lease on the day of closing; one without dates always is."""
+    closing, last = deal.purchase.closing_date, last_day(lease)
+    if not is_dated(lease) or closing is None or lease.start is None or last is None:
+        return True
+    return lease.start <= closing <= last
+
+
+def _sum(voice: Voice, amounts: list[float | None]) -> str:
+    known = [amount for amount in amounts if amount is not None]
+    return voice.money(sum(known) if len(known) == len(amounts) else None)
