@@ -19,7 +19,9 @@ ARROWS: Mapping[str, frozenset[str]] = {
     "files": frozenset({"engine", "deal", "text", "charts", "places"}),
     "report": frozenset({"engine", "deal", "text", "charts", "places"}),
     "commands": frozenset({"report", "files", "engine", "deal", "text", "charts", "places"}),
-    "__main__": frozenset({"commands", "files"}),
+    "session": frozenset({"report", "files", "engine", "deal", "text", "charts", "places"}),
+    "ui": frozenset({"session", "report", "files", "engine", "deal", "text", "charts", "places"}),
+    "__main__": frozenset({"commands", "files", "ui"}),
     "__init__": frozenset(),
 }
 """Each room and the rooms it may import besides itself."""
@@ -28,7 +30,7 @@ ONLY_IN: Mapping[str, tuple[str, ...]] = {
     "numpy": ("engine",),
     "pydantic": ("files",),
     "reportlab": ("report",),
-    "PySide6": (),
+    "PySide6": ("session", "ui"),
 }
 """Outside libraries that belong to some rooms alone."""
 

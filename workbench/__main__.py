@@ -46,6 +46,9 @@ def main(words: Sequence[str] | None = None) -> int:
     except BrokenPipeError:  # whoever read the output has had enough
         _let_go_of_output()
         return 0
+    except KeyboardInterrupt:
+        print("stopped", file=sys.stderr)
+        return 2
     except OSError as error:
         _let_go_of_output()
         return say_fault(error.filename or "standard output", error)

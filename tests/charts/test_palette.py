@@ -35,3 +35,9 @@ class TestEveryPalette:
 
     def test_the_tiers_of_rent_differ_in_tone(self, palette: Palette) -> None:
         assert contrast(palette["in_hand"], palette["expected"]) >= 3
+
+    def test_bars_stand_out_and_the_line_across_them(self, palette: Palette) -> None:
+        # 3:1 for what is no text, as WCAG 2.1 has it (success criterion 1.4.11)
+        assert contrast(palette["income"], palette["paper"]) >= 3
+        assert contrast(palette["debt"], palette["paper"]) >= 3
+        assert contrast(palette["debt"], palette["income"]) >= 3

@@ -107,9 +107,7 @@ def test_an_input_that_may_be_absent_is_none() -> None:
         assert check(set_value(FULLEST, path, None)) == []
 
 
-@pytest.mark.parametrize(
-    "leaf", [leaf for leaf in leaves(FULLEST) if leaf.field.is_row], ids=named
-)
+@pytest.mark.parametrize("leaf", [leaf for leaf in leaves(FULLEST) if leaf.field.is_row], ids=named)
 def test_year_1_is_always_there(leaf: Leaf) -> None:
     for row in ({}, {3: 0.0}):
         found = [one for one in check(set_value(FULLEST, leaf.path, row)) if one.code == "missing"]

@@ -72,9 +72,7 @@ def test_a_rent_by_area_needs_the_area() -> None:
 
 
 @pytest.mark.parametrize(("start", "end", "at"), [(START, None, "end"), (None, END, "start")])
-def test_a_lease_has_both_dates_or_neither(
-    start: date | None, end: date | None, at: str
-) -> None:
+def test_a_lease_has_both_dates_or_neither(start: date | None, end: date | None, at: str) -> None:
     found = issues(lease(start=start, end=end))
     assert found == [Issue(f"leases@e2.{at}", "date_missing")]
 

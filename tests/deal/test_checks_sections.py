@@ -1,6 +1,7 @@
 """Costs, loans, exit: what each choice needs beside it."""
 
 from datetime import date
+
 import pytest
 
 from tests.fullest import fullest, small

@@ -92,7 +92,7 @@ def test_a_new_rate_recasts_the_payment_over_what_remains() -> None:
     assert service[12:360] == pytest.approx(np.full(348, after), rel=1e-10)
 
 
-@settings(deadline=None)
+@settings(deadline=None, max_examples=60)
 @given(amounts, rows, st.integers(1, 480), st.integers(0, 120))
 def test_principal_sums_to_the_loan_and_the_last_payment_clears_it(
     amount: float, rates: list[float], amortisation: int, free: int
@@ -105,7 +105,7 @@ def test_principal_sums_to_the_loan_and_the_last_payment_clears_it(
     assert (made["balance"][: end - 1] > 0).all()
 
 
-@settings(deadline=None)
+@settings(deadline=None, max_examples=60)
 @given(amounts, rows, st.integers(1, 480), st.integers(0, 60), st.integers(1, 400))
 def test_it_ends_at_its_balloon(
     amount: float, rates: list[float], amortisation: int, free: int, term: int
@@ -122,7 +122,7 @@ def test_it_ends_at_its_balloon(
     assert not made["interest"][term:].any() and not made["balance"][term - 1 :].any()
 
 
-@settings(deadline=None)
+@settings(deadline=None, max_examples=60)
 @given(amounts, rows, st.integers(1, 480))
 def test_each_month_interest_is_on_the_balance_before(
     amount: float, rates: list[float], amortisation: int

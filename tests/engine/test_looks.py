@@ -93,8 +93,9 @@ def test_the_cells_of_a_year_for_each_trial() -> None:
     years = np.array([3.0, 1.0])
     assert at_year(TWO, years).tolist() == [-4, 10]
     assert at_year(column(5, 6, 7), years).tolist() == [7, 5]
-    cells = at_year(TWO, np.array([4.0, 2.0]))
-    assert np.isnan(cells[0]) and cells[1] == 20
+    for none in (4.0, 0.0, np.nan):
+        cells = at_year(TWO, np.array([none, 2.0]))
+        assert np.isnan(cells[0]) and cells[1] == 20
 
 
 def test_a_figure_on_a_date() -> None:

@@ -354,17 +354,13 @@ def test_an_unknown_year_past_the_hold_is_not_waited_for() -> None:
 
 
 def test_reasons_of_each_trial() -> None:
-    plan = compile_deal(deal())
     drivers = {
-        "leave.exit_yield": [[0.08], [np.nan], [0.08]],
+        "leave.exit_yield": [[np.nan], [0.08], [0.08]],
         "purchase.price": [[1000.0], [1000.0], [0.0]],
     }
-    result = evaluate(plan, drivers)
-    assert [result.figure("irr_unlevered", trial=n) is None for n in range(3)] == [
-        False,
-        True,
-        True,
-    ]
+    result = evaluate(compile_deal(deal()), drivers)
+    given = [result.figure("irr_unlevered", trial=n) is not None for n in range(3)]
+    assert given == [False, True, False]
     assert result.reason("irr_unlevered", trial=2).words == "The flows never change sign."
     assert result.reason("equity_multiple_unlevered", trial=2).code == "nothing_put_in"
 
@@ -389,7 +385,7 @@ def test_a_driver_in_place_of_a_missing_input_is_not_waited_for() -> None:
 
 def test_a_price_equal_to_the_value_is_paid_back_or_is_not() -> None:
     """Discounted flows that sum to nothing but for rounding: one or the other, and a reason."""
-    for raw in drawn(8900, 25):
+    for raw in drawn(8900, 16):
         base = replace(deal_from_raw(raw), purchase=deal().purchase)
         base = changed(base, {"returns.extra_on_exit": 0.0})
         worth = evaluated(base).figure("value")
@@ -421,9 +417,9 @@ def missing_figures(result: Result) -> list[tuple[str, int | None, Reason]]:
     return found
 
 
-@pytest.mark.parametrize("seed", range(4))
+@pytest.mark.parametrize("seed", range(3))
 def test_random_deals_give_a_reason_for_each_missing_figure(seed: int) -> None:
-    for raw in drawn(9000 + seed, 15):
+    for raw in drawn(9000 + seed, 12):
         for place, year, why in missing_figures(evaluated(deal_from_raw(raw))):
             assert why.code not in ("too_large", "waits_for"), (place, year)
 
@@ -443,10 +439,10 @@ def spoiled(base: Deal, random: Random) -> tuple[str, Deal]:
     return leaf.path, changed(base, {leaf.path: int(wrong) if leaf.field.kind is int else wrong})
 
 
-@pytest.mark.parametrize("seed", range(4))
+@pytest.mark.parametrize("seed", range(3))
 def test_one_faulty_input_is_the_reason_of_all_it_takes_away(seed: int) -> None:
     random = Random(seed)
-    for raw in drawn(9100 + seed, 8):
+    for raw in drawn(9100 + seed, 7):
         base = deal_from_raw(raw)
         before = {(place, year) for place, year, _ in missing_figures(evaluated(base))}
         for _ in range(2):

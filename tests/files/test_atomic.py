@@ -133,11 +133,18 @@ def test_the_data_is_flushed_before_it_replaces(
     tmp_path: Path, monkeypatch: pytest.MonkeyPatch
 ) -> None:
     order: list[str] = []
-    fsync, replace = os.fsync, Path.replace
-    monkeypatch.setattr(os, "fsync", lambda handle: (order.append("flush"), fsync(handle))[1])
-    monkeypatch.setattr(
-        Path, "replace", lambda part, target: (order.append("replace"), replace(part, target))[1]
-    )
+    fsync, moved = os.fsync, Path.replace
+
+    def flush(handle: int) -> None:
+        order.append("flush")
+        fsync(handle)
+
+    def move(part: Path, target: Path) -> Path:
+        order.append("replace")
+        return moved(part, target)
+
+    monkeypatch.setattr(os, "fsync", flush)
+    monkeypatch.setattr(Path, "replace", move)
     write_atomically(tmp_path / "my.deal", b"data")
     assert order == ["flush", "replace", "flush"]
 

@@ -7,7 +7,7 @@ from pathlib import Path
 from typing import Any
 
 import pytest
-from hypothesis import given
+from hypothesis import given, settings
 from hypothesis import strategies as st
 
 from tests.fullest import DIGEST, FULLEST, choices, fullest, kinds, small, small_raw
@@ -60,7 +60,7 @@ def test_the_text_is_plain_and_ends_its_last_line() -> None:
 
 
 def test_text_of_any_script_stands_as_it_is() -> None:
-    name = "Ωμέγα Жуков 日本 🏠 <b> \\ \" \x7f \u2028"
+    name = 'Ωμέγα Жуков 日本 🏠 <b> \\ " \x7f \u2028'
     text = deal_to_text(set_value(small(), "property.name", name))
     assert "Ωμέγα Жуков 日本 🏠 <b>" in text
     assert deal_from_text(text).property.name == name
@@ -180,6 +180,7 @@ def valid(leaf: Leaf) -> st.SearchStrategy[Any]:
 INPUTS = list(leaves(fullest()))
 
 
+@settings(deadline=None)
 @given(st.data())
 def test_random_changes_come_back_from_the_file(data: st.DataObject) -> None:
     deal = fullest()
@@ -216,6 +217,7 @@ def other_value(leaf: Leaf, rng: random.Random) -> Any:
     return {1: number, 7: mark.low} if leaf.field.is_row else number
 
 
+@settings(deadline=None)
 @given(st.binary(max_size=200))
 def test_random_bytes_are_read_or_refused(data: bytes) -> None:
     try:
@@ -224,6 +226,7 @@ def test_random_bytes_are_read_or_refused(data: bytes) -> None:
         assert str(error)
 
 
+@settings(deadline=None)
 @given(st.data())
 def test_a_sample_with_random_damage_is_read_or_refused(data: st.DataObject) -> None:
     """Pieces cut out, doubled, put in; whatever is read can be written and read again."""
@@ -232,7 +235,9 @@ def test_a_sample_with_random_damage_is_read_or_refused(data: st.DataObject) -> 
         start = data.draw(st.integers(0, len(text)))
         end = min(len(text), start + data.draw(st.integers(0, 30)))
         piece = data.draw(
-            st.sampled_from(["", text[start:end] * 2, "9", '"', "}", ",", "null", "1e999", "-", "\\"])
+            st.sampled_from(
+                ["", text[start:end] * 2, "9", '"', "}", ",", "null", "1e999", "-", "\\"]
+            )
         )
         text = text[:start] + piece + text[end:]
     survives(text)
@@ -241,6 +246,7 @@ def test_a_sample_with_random_damage_is_read_or_refused(data: st.DataObject) -> 
 SCALARS = st.none() | st.booleans() | st.integers() | st.floats() | st.text(max_size=6)
 
 
+@settings(deadline=None)
 @given(st.data())
 def test_a_sample_with_random_values_is_read_or_refused(data: st.DataObject) -> None:
     raw = json.loads(SAMPLE)

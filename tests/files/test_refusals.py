@@ -3,7 +3,7 @@
 from typing import Any
 
 import pytest
-from hypothesis import given
+from hypothesis import given, settings
 from hypothesis import strategies as st
 
 from tests.fullest import fullest_raw, small_raw
@@ -34,7 +34,10 @@ BY_METHOD = (
             {"purchase": {"price": float("inf")}},
             f"purchase.price: Infinity is not a number that a deal can hold{NUMBER}",
         ),
-        ({"leave": {"hold": 1.5}}, "leave.hold: 1.5 is not a whole number; it must be from 1 to 40"),
+        (
+            {"leave": {"hold": 1.5}},
+            "leave.hold: 1.5 is not a whole number; it must be from 1 to 40",
+        ),
         (
             {"leave": {"hold": 10.0}},
             "leave.hold: 10.0 is not written as a whole number, without a decimal point; it must "
@@ -149,6 +152,7 @@ JSON = st.recursive(
 )
 
 
+@settings(deadline=None)
 @given(st.sampled_from(sorted(small_raw())), JSON)
 def test_any_section_may_be_anything(section: str, value: Any) -> None:
     raw = {**small_raw(), section: value}

@@ -4,7 +4,7 @@ import json
 from typing import Any
 
 import pytest
-from hypothesis import given
+from hypothesis import given, settings
 from hypothesis import strategies as st
 
 from workbench.files.faults import UnreadableError
@@ -137,11 +137,13 @@ PLAIN = st.recursive(
 )
 
 
+@settings(deadline=None)
 @given(PLAIN)
 def test_plain_data_comes_back(raw: Any) -> None:
     assert parse(json.dumps(raw)) == raw
 
 
+@settings(deadline=None)
 @given(st.text(max_size=60))
 def test_any_text_is_read_or_refused(text: str) -> None:
     try:

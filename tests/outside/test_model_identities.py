@@ -23,7 +23,7 @@ from workbench.deal.inputs import at_year
 from workbench.deal.leave import ExitMethod, Leave
 from workbench.deal.property import Timing
 from workbench.deal.purchase import Purchase
-from workbench.deal.spend import Spend
+from workbench.deal.spend import Expense, Spend
 from workbench.engine.cash import npv
 from workbench.engine.loan import schedule
 from workbench.engine.plan import compile_deal
@@ -323,7 +323,8 @@ def separable(base: Deal, method: ExitMethod) -> Deal:
         base,
         other_income=(),
         works=(),
-        expenses=tuple(one for one in base.expenses if one.basis == "egi" and not one.stated),
+        loans=(),
+        expenses=(Expense("x1", amount=0.3, basis="egi"),),
         spend=Spend(reserves=0.03, reserves_basis="egi"),
         stated=replace(base.stated, **dict.fromkeys(vars(base.stated))),
         purchase=Purchase(price=1.0, closing_date=base.purchase.closing_date),

@@ -15,6 +15,11 @@ from workbench.deal.earn import Lease, Rent, Space
 from workbench.deal.leave import Leave, Returns
 from workbench.deal.property import About, Property
 from workbench.deal.purchase import Purchase
+from workbench.report.document import Document, Paper
+from workbench.report.memo import compose
+from workbench.report.readings import Readings
+from workbench.report.voice import Voice
+from workbench.text.locale import Locale
 
 STACK = (
     (226_927.0, 0.0),
@@ -130,6 +135,13 @@ def missing() -> dict[str, Any]:
         "reasons": {"price": "the price is missing", "value": "the hold is missing"},
         "issues": None,
     }
+
+
+def opening(
+    deal: Deal, found: dict[str, Any], locale: Locale, paper: Paper | None = None
+) -> Document:
+    """A memo of made-up figures, without the working that only a computed deal has."""
+    return compose(Readings(found), Voice(deal, locale), paper or locale.paper, ())
 
 
 def pages_of(pdf: bytes) -> list[str]:

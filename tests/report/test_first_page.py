@@ -4,13 +4,12 @@ from dataclasses import replace
 
 import pytest
 
-from tests.report.deals import DEAL, LONG, collisions, figures
+from tests.report.deals import DEAL, LONG, collisions, figures, opening
 from workbench.charts.shapes import Picture, Rect, Text
 from workbench.deal.deal import Deal
 from workbench.deal.property import About, Property
 from workbench.report.document import Paper
 from workbench.report.layout import lay_out
-from workbench.report.memo import build
 from workbench.text.locale import LOCALES
 
 LONG_DEAL = replace(
@@ -21,7 +20,7 @@ LONG_DEAL = replace(
 
 
 def first(deal: Deal, paper: Paper) -> Picture:
-    return lay_out(build(deal, figures(), LOCALES["en-GB"], paper))[0]
+    return lay_out(opening(deal, figures(), LOCALES["en-GB"], paper))[0]
 
 
 @pytest.mark.parametrize("paper", ["a4", "letter"])

@@ -8,8 +8,9 @@ from hypothesis import strategies as st
 
 from tests.report.deals import collisions, text_boxes
 from workbench.charts.shapes import Picture, Text
-from workbench.report.document import Column, Document, Paper, Section, Table, plain
+from workbench.report.document import Column, Document, Paper, Section, Subheading, Table, plain
 from workbench.report.layout import lay_out
+from workbench.report.slabs import Mark
 
 FOOT = "Arithmetic on assumptions, not market value."
 DOCUMENT = Document(
@@ -87,6 +88,33 @@ def test_the_header_of_a_table_is_repeated() -> None:
     assert all(said(page).count("How much") == 1 for page in pages)
     assert all(collisions(page) == [] for page in pages)
     assert sum("row" in text for page in pages for text in said(page)) == 100
+
+
+def test_pages_know_where_sections_begin() -> None:
+    sections = (
+        Section("One", (Subheading("Within"), PARAGRAPH)),
+        Section("Two", (PARAGRAPH,), True),
+    )
+    first, second = lay_out(document(*sections))
+    assert [mark for mark, _ in first.marks] == [
+        Mark("Purchase memo"), Mark("One"), Mark("Within", 1),
+    ]  # fmt: skip
+    assert [mark for mark, _ in second.marks] == [Mark("Two")]
+    for page in (first, second):
+        for mark, down in page.marks[-1:]:
+            (text,) = (t for t in page.shapes if isinstance(t, Text) and t.text == mark.title)
+            assert down < text.y < down + 25
+
+
+@pytest.mark.parametrize("filling", range(20, 44, 3))
+def test_what_is_too_long_to_be_kept_whole_begins_where_a_good_part_fits(filling: int) -> None:
+    lines = tuple(plain("One line of text.") for _ in range(filling))
+    rows = tuple((f"row {n}",) for n in range(60))
+    table = Section("Long", (Table((Column("Header"),), rows, whole=True),))
+    pages = lay_out(document(Section("First", lines), table))
+    (page,) = [page for page in pages if "Long" in said(page)]
+    after = said(page)[said(page).index("Long") + 1 :]
+    assert sum("row" in text for text in after) >= 5
 
 
 words = st.text(alphabet="ab cdefg W\n,.", max_size=400)

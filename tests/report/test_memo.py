@@ -7,13 +7,22 @@ from typing import Any
 
 import pytest
 
-from tests.report.deals import BARE, DEAL, LONG, collisions, deal_named, figures, missing, pages_of
+from tests.report.deals import (
+    BARE,
+    DEAL,
+    LONG,
+    collisions,
+    deal_named,
+    figures,
+    missing,
+    opening,
+    pages_of,
+)
 from workbench.charts.shapes import Rect
 from workbench.deal.deal import Deal
 from workbench.deal.property import About, Conventions, Property
 from workbench.report.cautions import FOOT, full_cautions
 from workbench.report.layout import lay_out
-from workbench.report.memo import build
 from workbench.report.pdf import draw
 from workbench.text.locale import LOCALES
 
@@ -44,7 +53,7 @@ CASES: dict[str, tuple[Deal, dict[str, Any], str]] = {
 
 
 def pages(deal: Deal, found: dict[str, Any], code: str = "en-US") -> list[str]:
-    return pages_of(draw(build(deal, found, LOCALES[code])).pdf)
+    return pages_of(draw(opening(deal, found, LOCALES[code])).pdf)
 
 
 @cache
@@ -56,7 +65,7 @@ def pages_of_case(name: str) -> list[str]:
 class TestEveryMemo:
     def test_no_text_covers_another_and_none_leaves_the_sheet(self, name: str) -> None:
         deal, found, code = CASES[name]
-        for page in lay_out(build(deal, found, LOCALES[code])):
+        for page in lay_out(opening(deal, found, LOCALES[code])):
             assert collisions(page) == []
             for shape in page.shapes:
                 if isinstance(shape, Rect):
@@ -124,7 +133,7 @@ def test_the_share_is_never_printed_without_its_hold_and_reference() -> None:
 
 
 def test_the_wall_stands_on_the_first_page() -> None:
-    page = lay_out(build(DEAL, figures(), LOCALES["en-GB"]))[0]
+    page = lay_out(opening(DEAL, figures(), LOCALES["en-GB"]))[0]
     fills = {shape.fill for shape in page.shapes if isinstance(shape, Rect)}
     assert {"in_hand", "expected", "exit"} <= fills
     (text, _) = pages(DEAL, figures())
@@ -184,6 +193,6 @@ def test_the_mark_for_missing_characters_is_explained_where_it_occurs() -> None:
 
 
 def test_the_paper_follows_the_locale() -> None:
-    assert build(DEAL, figures(), LOCALES["en-US"]).paper == "letter"
-    assert build(DEAL, figures(), LOCALES["en-GB"]).paper == "a4"
-    assert build(DEAL, figures(), LOCALES["en-GB"], "letter").paper == "letter"
+    assert opening(DEAL, figures(), LOCALES["en-US"]).paper == "letter"
+    assert opening(DEAL, figures(), LOCALES["en-GB"]).paper == "a4"
+    assert opening(DEAL, figures(), LOCALES["en-GB"], "letter").paper == "letter"

@@ -1,6 +1,7 @@
 """The finished file, read back."""
 
 from dataclasses import replace
+from datetime import date
 from io import BytesIO
 from typing import Any
 
@@ -8,9 +9,8 @@ import pytest
 from pypdf import PdfReader
 from pypdf.generic import DictionaryObject
 
-from tests.report.deals import DEAL, figures, pages_of
-from workbench.report.document import Document, Section, plain
-from workbench.report.memo import build
+from tests.report.deals import DEAL, figures, opening, pages_of
+from workbench.report.document import Document, Section, Subheading, plain
 from workbench.report.pdf import draw
 from workbench.text.locale import LOCALES
 
@@ -34,7 +34,7 @@ def embedded_fonts(reader: PdfReader) -> dict[str, Any]:
 
 
 def test_only_the_shipped_font_is_used_embedded_and_subset() -> None:
-    pdf = draw(build(DEAL, figures(), LOCALES["en-GB"])).pdf
+    pdf = draw(opening(DEAL, figures(), LOCALES["en-GB"])).pdf
     fonts = embedded_fonts(PdfReader(BytesIO(pdf)))
     assert fonts
     for name, file in fonts.items():
@@ -45,7 +45,7 @@ def test_only_the_shipped_font_is_used_embedded_and_subset() -> None:
 
 
 def test_the_same_document_gives_the_same_bytes() -> None:
-    document = build(DEAL, figures(), LOCALES["en-GB"])
+    document = opening(DEAL, figures(), LOCALES["en-GB"])
     assert draw(document).pdf == draw(document).pdf
 
 
@@ -55,6 +55,38 @@ def test_properties() -> None:
     assert reader.metadata.title == "Memo: Title"
     assert reader.metadata.author == "Author"
     assert str(reader.root_object["/Lang"]) == "en"
+
+
+def titles_and_pages(reader: PdfReader, outline: Any) -> list[Any]:
+    return [
+        titles_and_pages(reader, entry)
+        if isinstance(entry, list)
+        else (str(entry.title), reader.get_destination_page_number(entry))
+        for entry in outline
+    ]
+
+
+def test_the_outline_has_sections_and_what_is_within_them() -> None:
+    inner = (Subheading("Loan\nA"), plain("Body."), Subheading("Loan B"))
+    last = Section("End", (plain("x"),), new_page=True)
+    document = replace(PLAIN, sections=(Section("Loans", inner), last))
+    reader = PdfReader(BytesIO(draw(document).pdf))
+    assert titles_and_pages(reader, reader.outline) == [
+        ("Memo", 0),
+        ("Loans", 0),
+        [("Loan A", 0), ("Loan B", 0)],
+        ("End", 1),
+    ]
+    assert str(reader.root_object["/PageMode"]) == "/UseOutlines"
+    assert "/DisplayDocTitle" in str(reader.root_object["/ViewerPreferences"])
+
+
+def test_a_stated_date_is_that_of_the_file() -> None:
+    made = replace(PLAIN, made_on=date(2026, 3, 14))
+    metadata = PdfReader(BytesIO(draw(made).pdf)).metadata
+    assert metadata is not None
+    assert metadata.creation_date is not None
+    assert metadata.creation_date.date() == date(2026, 3, 14)
 
 
 def test_properties_hold_no_control_characters_and_are_not_endless() -> None:

@@ -43,3 +43,9 @@ def test_a_reason_is_looked_for_upwards_and_in_order() -> None:
     assert read.reason("margin", "value") == "no exit"
     assert read.reason("irr.levered", "exit") == "no loan"
     assert read.reason("irr.unlevered") == ""
+
+
+def test_loans_by_their_ids() -> None:
+    read = Readings({"loans": [{"id": "l1", "amount": 5.0}, {"id": "l2"}]})
+    assert read.loan_amounts() == {"l1": 5.0, "l2": None}
+    assert Readings({}).loan_amounts() == {}

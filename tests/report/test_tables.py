@@ -1,12 +1,9 @@
 """Tables and key figures."""
 
-from itertools import pairwise
-
 from workbench.charts.lettering import width
 from workbench.charts.shapes import Line, Text
-from workbench.report.document import Column, KeyFigure, KeyFigures, Table
-from workbench.report.key_figure_slabs import key_figure_slabs
-from workbench.report.slabs import Slab, piled, stack_height
+from workbench.report.document import Column, Table
+from workbench.report.slabs import Slab, piled
 from workbench.report.tables import table_slabs
 
 COLUMNS = (Column("What", share=0.6), Column("Amount", "right", 0.4))
@@ -59,27 +56,52 @@ def test_cells_may_be_cut_after_some_lines() -> None:
     assert texts(slabs)[-1].text.endswith("…")
 
 
-def test_key_figures_have_their_values_at_the_right_edge_on_the_label_s_line() -> None:
-    item = KeyFigure("Value", "USD 3,807,784", "worth on these assumptions", strong=True)
-    found = {text.text: text for text in texts(key_figure_slabs(KeyFigures((item,)), 240))}
-    label, value, note = (found[text] for text in (item.label, item.value, item.note))
-    assert (value.x, value.anchor) == (240, "end")
-    assert label.y == value.y < note.y
+def test_no_row_stands_alone_and_what_leads_to_a_sum_goes_with_it() -> None:
+    rows = tuple((f"row {n}", str(n)) for n in range(12))
+    table = Table(COLUMNS, rows, frozenset({8}))
+    kept = [slab.keep_next or slab.prefer_next for slab in table_slabs(table, 300)][1:]
+    assert kept == [place in (0, 5, 6, 7, 10) for place in range(12)]
 
 
-def test_a_long_value_is_set_smaller_and_never_cut() -> None:
-    value = "USD 123,456,789,012,345,678,901"
-    (slab,) = key_figure_slabs(KeyFigures((KeyFigure("Value", value),)), 240)
-    (shown,) = (s for s in slab.shapes if isinstance(s, Text) and s.anchor == "end")
-    assert shown.text == value
-    assert width(value, shown.size, "bold") <= 0.66 * 240 + 1e-6
+def test_sums_that_follow_one_another_stand_together() -> None:
+    rows = tuple((f"row {n}", str(n)) for n in range(9))
+    table = Table(COLUMNS, rows, frozenset({4, 5}))
+    kept = [slab.keep_next or slab.prefer_next for slab in table_slabs(table, 300)][1:]
+    assert kept == [place in (0, 1, 2, 3, 4, 7) for place in range(9)]
 
 
-def test_key_figures_are_parted_by_rules_and_grow_with_their_air() -> None:
-    items = tuple(KeyFigure(f"Label {n}", str(n)) for n in range(3))
-    tight, airy = (key_figure_slabs(KeyFigures(items, air), 240) for air in (0.0, 6.0))
-    rules = [sum(isinstance(shape, Line) for shape in slab.shapes) for slab in tight]
-    assert rules == [0, 1, 1]
-    assert stack_height(airy) == stack_height(tight) + 18
-    lines = [text.y for text in texts(tight) if text.anchor == "start"]
-    assert all(lower > upper for upper, lower in pairwise(lines))
+def test_a_whole_table_is_kept_together() -> None:
+    rows = tuple((f"row {n}", str(n)) for n in range(9))
+    kept = [
+        slab.keep_next or slab.prefer_next
+        for slab in table_slabs(Table(COLUMNS, rows, whole=True), 300)
+    ]
+    assert kept == [True] * 9 + [False]
+
+
+def test_a_note_stands_under_its_row_across_all_columns() -> None:
+    table = Table(COLUMNS, (("Rent", "1"), ("Costs", "2")), notes=("", "as the owner has them"))
+    slabs = table_slabs(table, 300)
+    note = texts(slabs)[-1]
+    assert (note.text, note.colour, note.x) == ("as the owner has them", "muted", 0)
+    assert slabs[-2].keep_next
+    assert slabs[-1].header == (slabs[0],)
+
+
+def test_slanted_cells_are_paler_as_well() -> None:
+    table = Table(COLUMNS, (("Rent", "1"),), slanted=frozenset({(0, 1)}))
+    rent, amount = texts(table_slabs(table, 300))[2:]
+    assert (rent.weight, rent.colour) == ("regular", "ink")
+    assert (amount.weight, amount.colour) == ("italic", "muted")
+
+
+def test_titles_of_fewer_lines_stand_on_the_last_line() -> None:
+    table = Table((Column("one two three four five", share=0.2), Column("short")), (("a", "b"),))
+    found = {text.text: text for text in texts(table_slabs(table, 200))}
+    assert found["short"].y == max(text.y for text in found.values() if text.colour == "muted")
+
+
+def test_a_fine_table_is_set_smaller() -> None:
+    rows = (("Rent", "1"),)
+    usual, fine = (table_slabs(Table(COLUMNS, rows, fine=fine), 300) for fine in (False, True))
+    assert max(text.size for text in texts(fine)) < max(text.size for text in texts(usual))

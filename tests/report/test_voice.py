@@ -11,6 +11,7 @@ from workbench.deal.property import Conventions
 from workbench.deal.purchase import Purchase
 from workbench.report.voice import Voice
 from workbench.text.locale import LOCALES
+from workbench.text.numbers import THOUSAND
 
 US, DE = LOCALES["en-US"], LOCALES["de-DE"]
 
@@ -70,3 +71,47 @@ def test_the_size_as_far_as_it_is_known() -> None:
     assert size() == ""
     feet = replace(DEAL, conventions=Conventions(area_unit="sqft"))
     assert Voice(feet, US).size() == "8 units, 640\u00a0sq ft"
+
+
+def with_currency(code: str) -> Voice:
+    return Voice(replace(DEAL, conventions=Conventions(code)), US)
+
+
+def test_amounts_as_typed_have_the_decimals_of_the_currency() -> None:
+    assert with_currency("USD").exact(19.5) == "19.50"
+    assert with_currency("USD").exact(19.0) == "19"
+    assert with_currency("USD").exact(19.0, 2) == "19.00"
+    assert with_currency("USD").exact(None) == "—"
+    assert with_currency("KRW").exact(19.5) == "19.50"
+    assert with_currency("KWD").exact(19.5) == "19.500"
+    assert with_currency("none").exact(19.5) == "19.50"
+
+
+def test_what_amounts_are_counted_in() -> None:
+    assert with_currency("EUR").unit() == "EUR"
+    assert with_currency("EUR").unit(THOUSAND) == "EUR thousand"
+    assert len(with_currency("E" * 5000).unit()) == 10
+
+
+def test_amounts_of_a_table_are_shortened_beyond_every_scale() -> None:
+    voice = Voice(DEAL, US)
+    assert voice.scaled(1_234_567.0, THOUSAND) == "1,235"
+    assert voice.scaled(1e40, THOUSAND) == "1.0E40"
+
+
+def test_amounts_of_a_scale_are_put_alike() -> None:
+    voice = Voice(DEAL, US)
+    small = voice.alike((0.0, 250_000.0), (None, 4e5))
+    assert [small(amount) for amount in (0.0, 200_000.0)] == ["0", "200,000"]
+    large = voice.alike((2e9,))
+    assert [large(amount) for amount in (0.0, 5e8, -1.5e9)] == ["0", "500m", "−1,500m"]
+    assert voice.alike((1e60,))(1e60) == "1.0E60"
+
+
+def test_figures_of_tables() -> None:
+    voice = Voice(DEAL, US)
+    assert voice.area(62.5) == "62.5\u00a0m²"
+    assert voice.day(date(2026, 4, 1)) == "Apr 1, 2026"
+    assert voice.day(None) == "—"
+    assert voice.count(1200.0) == "1,200"
+    assert voice.decimal(1.25, 1) == "1.3"

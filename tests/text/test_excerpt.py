@@ -3,7 +3,7 @@
 import unicodedata
 
 import pytest
-from hypothesis import given
+from hypothesis import given, settings
 from hypothesis import strategies as st
 
 from workbench.text.excerpt import excerpt
@@ -36,6 +36,7 @@ def test_a_very_long_text_is_not_read_to_its_end() -> None:
     assert excerpt("\n" * 10_000 + "end") == ""
 
 
+@settings(deadline=None)
 @given(st.text(st.characters(), max_size=200), st.integers(2, 50))
 def test_nothing_in_it_steers_a_terminal(text: str, most: int) -> None:
     shown = excerpt(text, most)

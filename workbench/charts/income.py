@@ -2,12 +2,11 @@
 
 from collections.abc import Callable
 from dataclasses import dataclass
-from itertools import pairwise
 
 from workbench.charts.legend import Entry, legend
 from workbench.charts.masonry import Box
 from workbench.charts.plot import Plot, Room, ground, known, plot_of, region
-from workbench.charts.shapes import Line, Picture, Rect, Region, Shape
+from workbench.charts.shapes import Line, Picture, Polyline, Rect, Region, Shape
 
 _NOI_PART = (0.14, 0.5)
 _CASH_PART = (0.52, 0.86)
@@ -16,13 +15,15 @@ _PEN = 1.8
 
 @dataclass(frozen=True)
 class IncomeFigures:
-    """Amounts of each year from year 1. `money` puts one into the reader's locale."""
+    """Amounts of each year from year 1. `money` puts one into words for the reader."""
 
     noi: tuple[float | None, ...]
     net_cash: tuple[float | None, ...]
     service: tuple[float | None, ...]
     """What is paid on loans, above nothing; empty where there is no loan."""
     money: Callable[[float], str]
+    mark: Callable[[float], str]
+    """The same for the scale, whose amounts are put alike."""
 
 
 def draw_income(figures: IncomeFigures, width: float, height: float, size: float = 11.0) -> Picture:
@@ -31,7 +32,7 @@ def draw_income(figures: IncomeFigures, width: float, height: float, size: float
     above, tall = _legend(figures, room)
     series = (figures.noi, figures.net_cash, figures.service)
     amounts = [amount for row in series for _, amount in known(row)]
-    plot, frame = plot_of(room, amounts, range(1, len(figures.noi) + 1), figures.money, tall)
+    plot, frame = plot_of(room, amounts, range(1, len(figures.noi) + 1), figures.mark, tall)
     noi = _bars(plot, figures.noi, "noi", _NOI_PART)
     cash = _bars(plot, figures.net_cash, "net_cash_flow", _CASH_PART)
     lines = _service(plot, figures.service)
@@ -66,22 +67,24 @@ def _outlined(box: Box) -> Rect:
 
 
 def _service(plot: Plot, row: tuple[float | None, ...]) -> list[Shape]:
-    """A level line for each year, joined where years follow one another."""
+    """A stepped line over the years in which anything is paid, broken where nothing is."""
     shapes: list[Shape] = []
-    paid = known(row)
-    for place, amount in paid:
-        left, wide = plot.place(place + 1)
-        shapes.append(Line(left, plot.y(amount), left + wide, plot.y(amount), "debt", _PEN))
-    for (place, amount), (following, other) in pairwise(paid):
-        if following == place + 1 and other != amount:
-            x = plot.place(following + 1)[0]
-            shapes.append(Line(x, plot.y(amount), x, plot.y(other), "debt", _PEN))
+    points: list[tuple[float, float]] = []
+    for place, amount in enumerate((*row, None), start=1):
+        if amount:
+            left, wide = plot.place(place)
+            points += [(left, plot.y(amount)), (left + wide, plot.y(amount))]
+        elif points:
+            shapes.append(Polyline(tuple(points), "debt", _PEN))
+            points = []
     return shapes
 
 
 def _line_regions(plot: Plot, row: tuple[float | None, ...]) -> list[Region]:
     boxes = [
-        (place, plot.bar(place + 1, amount, amount, (0.0, 1.0))) for place, amount in known(row)
+        (place, plot.bar(place + 1, amount, amount, (0.0, 1.0)))
+        for place, amount in known(row)
+        if amount
     ]
     return [region(f"debt_service.{place + 1}", box) for place, box in boxes]
 
@@ -93,7 +96,7 @@ def _legend(figures: IncomeFigures, room: Room) -> tuple[list[Shape], float]:
         Entry("net operating income", lambda box: [_filled(box)]),
         Entry("net cash flow before debt", lambda box: [_outlined(box)]),
     ]
-    if known(figures.service):
+    if any(amount for _, amount in known(figures.service)):
         entries.append(Entry("debt service", _line_sample))
     return legend(entries, room.size, room.width)
 
@@ -110,10 +113,13 @@ def _words(figures: IncomeFigures) -> str:
         return "Net operating income cannot be given."
     money = figures.money
     said = f"Net operating income is {money(noi[0][1])} in year {noi[0][0] + 1}"
+    least = min(cash, key=lambda one: one[1])
     if len(noi) > 1:
         said += f" and {money(noi[-1][1])} in year {noi[-1][0] + 1}"
-    least = min(cash, key=lambda one: one[1])
-    said += f"; net cash flow before debt is lowest in year {least[0] + 1}, at {money(least[1])}; "
+        said += f"; net cash flow before debt is lowest in year {least[0] + 1}, at"
+    else:
+        said += "; net cash flow before debt is"
+    said += f" {money(least[1])}; "
     if not any(amount for _, amount in paid):
         return f"{said}there is no debt service."
     most = money(max(amount for _, amount in paid))

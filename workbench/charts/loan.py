@@ -24,6 +24,8 @@ class LoanFigures:
     sale: tuple[float | None, ...]
     """What the exit method makes of a sale at the end of each year."""
     money: Callable[[float], str]
+    mark: Callable[[float], str]
+    """The same for the scale, whose amounts are put alike."""
     share: Callable[[float], str]
 
 
@@ -33,7 +35,7 @@ def draw_loan(figures: LoanFigures, width: float, height: float, size: float = 1
     above, tall = _legend(figures, room)
     amounts = [amount for row in (figures.balance, figures.sale) for _, amount in known(row)]
     amounts += [] if figures.price is None else [figures.price]
-    plot, frame = plot_of(room, amounts, range(len(figures.balance)), figures.money, tall)
+    plot, frame = plot_of(room, amounts, range(len(figures.balance)), figures.mark, tall)
     bars = [
         (f"loan_balance.{year}", plot.bar(year, 0.0, amount, _PART))
         for year, amount in known(figures.balance)

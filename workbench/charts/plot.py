@@ -12,6 +12,8 @@ from workbench.charts.shapes import Line, Region, Shape, Text
 _LEAST_REACH = 1e-9
 """Below it all amounts are taken for nothing; the least part of any currency is larger."""
 _MANY_YEARS = 15
+_WIDEST = 8.0
+"""Width of a year's bars at most, as a multiple of the letter size."""
 _LEAST_REGION = 6.0
 """A lower bar is still found by pointing at it."""
 
@@ -43,6 +45,8 @@ class Plot:
     first: int
     """The number of the first place: 1, or 0 where closing has a place of its own."""
     count: int
+    widest: float
+    """No bar group is wider, however few years there are."""
 
     def y(self, amount: float) -> float:
         """How far down an amount lies."""
@@ -56,7 +60,9 @@ class Plot:
 
     def bar(self, number: int, start: float, end: float, part: tuple[float, float]) -> Box:
         """A bar from one amount to another, over a part of the place given by its ends, 0 to 1."""
-        left, wide = self.place(number)
+        left, whole = self.place(number)
+        wide = min(whole, self.widest)
+        left += (whole - wide) / 2
         upper, lower = sorted((self.y(start), self.y(end)))
         return Box(left + part[0] * wide, upper, (part[1] - part[0]) * wide, lower - upper)
 
@@ -91,7 +97,8 @@ def plot_of(
     names = [money(mark) for mark in marks]
     left = max(width(name, room.size) for name in names) + 7.0 if room.lettered else 2.0
     low, high = marks[0], marks[-1] if len(marks) > 1 else marks[0] + 1.0
-    plot = Plot(left, room.width - 2.0, top, bottom, low, high, years.start, len(years))
+    edges = (left, room.width - 2.0, top, bottom)
+    plot = Plot(*edges, low, high, years.start, len(years), _WIDEST * room.size)
     shapes: list[Shape] = []
     for mark, name in zip(marks, names, strict=True):
         y = plot.y(mark)
@@ -137,6 +144,7 @@ def _year_name(plot: Plot, room: Room, year: int) -> Text:
 
 
 def _are_clear(names: list[Text], room: Room) -> bool:
-    ends = [(name.x, width(name.text, room.size) / 2 + 0.3 * room.size) for name in names]
+    ends = [(name.x, width(name.text, room.size) / 2) for name in names]
+    apart = 0.6 * room.size
     inside = all(x - half >= 0 and x + half <= room.width for x, half in ends)
-    return inside and all(a + half <= b - more for (a, half), (b, more) in pairwise(ends))
+    return inside and all(a + half + apart <= b - more for (a, half), (b, more) in pairwise(ends))

@@ -18,11 +18,13 @@ _ROW = 0.75
 
 @dataclass(frozen=True)
 class TierFigures:
-    """Net cash flow of each year from year 1, by tier. `money` puts one into the locale."""
+    """Net cash flow of each year from year 1, by tier. `money` puts one into words."""
 
     in_hand: tuple[float | None, ...]
     expected: tuple[float | None, ...]
     money: Callable[[float], str]
+    mark: Callable[[float], str]
+    """The same for the scale, whose amounts are put alike."""
 
 
 @dataclass(frozen=True)
@@ -42,7 +44,7 @@ def draw_tiers(figures: TierFigures, width: float, height: float, size: float = 
     above, tall = _legend(pieces, room)
     amounts = [amount for piece in pieces for amount in (piece.start, piece.end)]
     years = range(1, len(figures.in_hand) + 1)
-    plot, frame = plot_of(room, amounts, years, figures.money, tall)
+    plot, frame = plot_of(room, amounts, years, figures.mark, tall)
     boxes = [(piece, plot.bar(piece.year, piece.start, piece.end, _PART)) for piece in pieces]
     shapes = [*above, *frame]
     for piece, box in boxes:

@@ -34,7 +34,7 @@ def section_slabs(section: Section, room: float, tallest: float) -> tuple[Slab, 
     slabs += column_slabs(section.blocks, room, tallest)
     slabs[0] = replace(slabs[0], space=sheet.SECTION_SPACE)
     if section.together:
-        slabs[:-1] = [replace(slab, keep_next=True) for slab in slabs[:-1]]
+        slabs[:-1] = [replace(slab, prefer_next=True) for slab in slabs[:-1]]
     return tuple(slabs)
 
 

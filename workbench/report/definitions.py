@@ -14,6 +14,7 @@ _LEFT_OUT = frozenset({"tiers", "exit", "loans", "sources_uses", "statement", "s
 """Figures that have a section of their own."""
 _RATES = ("irr", "mirr", "going_in_yield", "yield_on_cost", "debt_yield")
 """Fractions of which the second decimal matters."""
+_OF_DEBT = frozenset({"dscr", "debt_yield"})
 _LOWEST = frozenset({"dscr", "debt_yield", "cash_on_cash"})
 
 
@@ -33,7 +34,8 @@ def _rows(years: Years, read: Readings) -> Iterator[tuple[str, str, str]]:
     seen: set[str] = set()
     for figure in figures_of(years.voice.deal):
         known = figure.key in years.result.declared and figure.key not in seen
-        if not known or figure.place[0] in _LEFT_OUT:
+        of_debt = figure.place[0] in _OF_DEBT and not years.voice.deal.loans
+        if not known or of_debt or figure.place[0] in _LEFT_OUT:
             continue
         seen.add(figure.key)
         declared = years.result.declared[figure.key]

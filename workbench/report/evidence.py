@@ -2,13 +2,15 @@
 
 from collections import Counter
 from collections.abc import Sequence
+from dataclasses import replace
 
 from workbench.deal.checks_sections import exit_methods
+from workbench.deal.earn import Rent
 from workbench.deal.records import Comparable
 from workbench.report.document import Column, Section, Table
 from workbench.report.names import one_line
 from workbench.report.readings import Readings
-from workbench.report.rents import per_area
+from workbench.report.rents import comparable, rent_unit
 from workbench.report.typed import amount_text, decimals_of
 from workbench.report.voice import Voice
 from workbench.text.numbers import MISSING
@@ -30,15 +32,17 @@ def evidence_section(read: Readings, voice: Voice) -> Section:
 
 
 def _market_rent(voice: Voice) -> tuple[str, ...]:
-    """By area, in the period that most market rents of the deal are stated for."""
+    """By area where areas are known, in the period that most market rents are stated for."""
     spaces = voice.deal.spaces
     periods = Counter(space.market_rent.per for space in spaces)
-    per = periods.most_common(1)[0][0] if periods else "month"
+    by_area = any(space.area is not None or space.market_rent.of == "area" for space in spaces)
+    like = Rent(None, max(periods, key=lambda per: periods[per], default="month"), "unit")
+    like = replace(like, of="area") if by_area else like
     lettings = [one for one in voice.deal.comparables if one.kind == "rent"]
-    used = [per_area(space.market_rent, space.area, per) for space in spaces]
-    seen = [(one, per_area(one.rent, one.area, per)) for one in lettings]
+    used = [comparable(space.market_rent, space.area, like) for space in spaces]
+    seen = [(one, comparable(one.rent, one.area, like)) for one in lettings]
     known = [(one, rent) for one, rent in seen if rent is not None]
-    label = f"Market rent per {voice.area_unit} a {per}"
+    label = f"Market rent {rent_unit(voice, like)}"
     return _row(voice, label, _range(voice, used, "money"), known, "money", len(lettings))
 
 

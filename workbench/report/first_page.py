@@ -3,9 +3,8 @@
 from dataclasses import dataclass, replace
 from math import inf
 
-from workbench.charts.lettering import shorten
 from workbench.charts.shapes import Picture
-from workbench.charts.wall import WallFigures, draw_wall
+from workbench.charts.wall import draw_wall
 from workbench.report import sheet
 from workbench.report.blocks import column_slabs
 from workbench.report.cautions import parties
@@ -24,13 +23,12 @@ from workbench.report.layout import lay_out
 from workbench.report.readings import Readings
 from workbench.report.slabs import stack_height
 from workbench.report.voice import Voice
-from workbench.report.wording import lead, sentence
+from workbench.report.wall_figures import wall_figures
+from workbench.report.wording import lead
 
 _LEFT_SHARE = 0.5
 _LOWEST_WALL = 330.0
 _WALL_LETTERS = 8.6
-_REASON_ROOM = 75.0
-"""How much of a reason the wall shows, as a width in letter sizes."""
 
 
 @dataclass(frozen=True)
@@ -77,17 +75,4 @@ def _sections(
 
 def wall_of(read: Readings, voice: Voice, width: float, height: float) -> Picture:
     """The value wall of a deal's figures."""
-    courses = read.courses()
-    reason = read.reason("exit.present_value", "exit.price", "stack", "value")
-    figures = WallFigures(
-        courses=courses or (),
-        exit=None if courses is None else read.number("exit.present_value"),
-        value=read.number("value"),
-        price=read.number("price"),
-        exit_share=read.number("exit_value_share"),
-        money=voice.short_money,
-        share=voice.share,
-        has_leases=any(space.leases for space in voice.deal.spaces),
-        exit_reason=shorten(sentence(reason), 1.0, _REASON_ROOM),
-    )
-    return draw_wall(figures, width, height, _WALL_LETTERS)
+    return draw_wall(wall_figures(read, voice), width, height, _WALL_LETTERS)

@@ -1,5 +1,7 @@
 """How wide the columns of a table are."""
 
+from collections.abc import Callable
+
 from workbench.charts.lettering import Weight, printable, width
 from workbench.report import sheet
 from workbench.report.document import Table
@@ -13,31 +15,48 @@ def fitted(table: Table, room: float) -> tuple[float, ...]:
     columns = table.columns
     gap = sheet.FINE_GAP if table.fine else sheet.CELL_GAP
     free = room - gap * (len(columns) - 1)
-    natural = [
-        _natural(table, place) if column.fit else 0.0 for place, column in enumerate(columns)
-    ]
     shares = sum(column.share for column in columns if not column.fit)
-    most = free * (_MOST_FITTED if shares else 1.0)
-    taken = sum(natural)
-    if taken and (taken > most or not shares):
-        natural = [wide * most / taken for wide in natural]
-        taken = most
+    natural = _natural_widths(table, free * _MOST_FITTED if shares else free, bool(shares))
+    left = free - sum(natural)
     return tuple(
-        wide if column.fit else (free - taken) * column.share / shares
+        wide if column.fit else left * column.share / shares
         for column, wide in zip(columns, natural, strict=True)
     )
 
 
-def _natural(table: Table, place: int) -> float:
-    """The width of the widest cell of a column, or of its title on two lines."""
+def _natural_widths(table: Table, most: float, has_others: bool) -> list[float]:
+    """Widths of the fitted columns, 0 for the others.
+
+    Titles are broken into more lines before any figure has to be.
+    """
+    natural: list[float] = []
+    for title_width in (_two_lines, _longest_word):
+        natural = [
+            _natural(table, place, title_width) if column.fit else 0.0
+            for place, column in enumerate(table.columns)
+        ]
+        if sum(natural) <= most:
+            break
+    taken = sum(natural)
+    if taken and (taken > most or not has_others):
+        return [wide * most / taken for wide in natural]
+    return natural
+
+
+def _natural(table: Table, place: int, title_width: Callable[[str, float], float]) -> float:
+    """The width of the widest cell of a column, or of its title."""
     size = sheet.FINE if table.fine else sheet.CELL
     title_size = sheet.FINE_NOTE if table.fine else sheet.NOTE
-    title = _two_lines(printable(table.columns[place].title), title_size)
+    title = title_width(printable(table.columns[place].title), title_size)
     cells = [
         max(width(line, size, _weight(table, number)) for line in printable(row[place]).split("\n"))
         for number, row in enumerate(table.rows)
     ]
     return max((title, *cells)) + 0.01
+
+
+def _longest_word(title: str, size: float) -> float:
+    return max((width(word, size) for word in title.split()), default=0.0)
 
 
 def _two_lines(title: str, size: float) -> float:

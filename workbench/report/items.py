@@ -36,7 +36,7 @@ def item_blocks(voice: Voice) -> Iterator[Block]:
         items = _items(voice.deal, name)
         if items:
             yield Subheading(title)
-            yield item_table(voice, items)
+            yield item_table(voice, name, items)
 
 
 def _items(deal: Deal, name: str) -> Sequence[Any]:
@@ -45,11 +45,11 @@ def _items(deal: Deal, name: str) -> Sequence[Any]:
     return found
 
 
-def item_table(voice: Voice, items: Sequence[Any]) -> Table:
+def item_table(voice: Voice, name: str, items: Sequence[Any]) -> Table:
     """Items one under the other."""
     shown = [field for field in declared(type(items[0])).values() if _is_shown(field, items)]
     columns = tuple(_column(voice, field) for field in shown)
-    rows = tuple(tuple(_cell(voice, item, field) for field in shown) for item in items)
+    rows = tuple(tuple(_cell(voice, name, item, field) for field in shown) for item in items)
     whole = len(items) <= _WHOLE
     return Table(columns, rows, most_lines=_MOST_LINES, fine=True, whole=whole)
 
@@ -71,10 +71,10 @@ def _column(voice: Voice, field: Field) -> Column:
     return Column(field.input.label, "right", fit=True)
 
 
-def _cell(voice: Voice, item: Any, field: Field) -> str:
+def _cell(voice: Voice, name: str, item: Any, field: Field) -> str:
     value = getattr(item, field.name)
     if field.name == "name":
-        return item_title(item)
+        return item_title(item, name)
     if value is None and field.name in _ABSENT:
         return _ABSENT[field.name]
     return value_text(voice, item, field, value)

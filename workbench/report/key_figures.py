@@ -10,10 +10,11 @@ _NOT_MARKET = "not market value"
 
 def key_figures(read: Readings, voice: Voice) -> tuple[KeyFigure, ...]:
     """Price, value, margin, the shares, and what an owner and a lender look for first."""
-    currency = voice.deal.conventions.currency
     worth = f"worth on these assumptions at a required return of {voice.required_return()}"
     chosen = [
-        KeyFigure("Price", voice.priced(read.number("price")), f"all amounts in {currency}", True),
+        KeyFigure(
+            "Price", voice.priced(read.number("price")), f"all amounts in {voice.unit()}", True
+        ),
         KeyFigure("Value", voice.priced(read.number("value")), f"{worth}, {_NOT_MARKET}", True),
         KeyFigure(
             "Margin",

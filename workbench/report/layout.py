@@ -10,7 +10,7 @@ from workbench.charts.wrapping import wrap, wrap_short
 from workbench.report import sheet
 from workbench.report.blocks import section_slabs
 from workbench.report.document import Document
-from workbench.report.slabs import Mark, Slab
+from workbench.report.slabs import Mark, Slab, settled
 
 _FOOT_GAP = 14.0
 _FOOT_NUMBER = 60.0
@@ -76,7 +76,7 @@ def _pages(document: Document, column: float, first: _Room, later: _Room) -> Ite
     page = _Body()
     down = room.top
     for section in document.sections:
-        slabs = section_slabs(section, column, later.height)
+        slabs = settled(section_slabs(section, column, later.height), later.height)
         for place, slab in enumerate(slabs):
             forced = section.new_page and place == 0
             empty = down == room.top

@@ -10,11 +10,15 @@ from workbench.text.numbers import MISSING, rate
 
 
 def lease_note(voice: Voice, lease: Lease) -> str:
-    """Steps, free months and the penalty of a break; empty where there is none of them."""
+    """Break, steps and free months; empty where there is none of them."""
     return "; ".join(_parts(voice, lease))
 
 
 def _parts(voice: Voice, lease: Lease) -> Iterator[str]:
+    if lease.break_date is not None:
+        penalty = voice.money(lease.break_penalty)
+        with_it = f", with a penalty of {penalty}" if lease.break_penalty else ""
+        yield f"tenant’s break on {voice.day(lease.break_date)}{with_it}"
     steps = sorted(lease.steps, key=lambda step: step.date or date.max)
     if steps:
         unit = rent_unit(voice, lease.rent)
@@ -24,8 +28,6 @@ def _parts(voice: Voice, lease: Lease) -> Iterator[str]:
     if lease.free_months:
         months = "1 month" if lease.free_months == 1 else f"{lease.free_months} months"
         yield f"{months} free of rent"
-    if lease.break_penalty:
-        yield f"penalty of {voice.money(lease.break_penalty)} at the break"
     if lease.start is None or lease.end is None:
         yield "without dates: all of it is expected"
 

@@ -9,6 +9,8 @@ from workbench.text import numbers
 from workbench.text.choices import choice
 from workbench.text.messages import word_reason
 
+_WHOLE = 24
+"""A derivation of up to so many steps is kept on one page."""
 _TITLE = "How the exit was derived"
 
 
@@ -24,6 +26,7 @@ def exit_section(years: Years) -> Section:
         tuple((step.label, step.text) for step in steps),
         frozenset(number for number, step in enumerate(steps) if step.strong),
         notes=tuple(step.note for step in steps),
+        whole=len(steps) <= _WHOLE,
     )
     if years.result.figure("exit_price") is not None:
         return Section(_TITLE, (table,))

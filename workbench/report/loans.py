@@ -1,40 +1,43 @@
 """Loans by year: what each costs and leaves, how income covers it, and the loan under the price."""
 
-from workbench.charts.loan import LoanFigures, draw_loan
+from dataclasses import replace
+
+from workbench.charts.loan import draw_loan
 from workbench.deal.borrow import Loan
+from workbench.report.chart_figures import loan_figures
 from workbench.report.document import Block, Figure, Section, Subheading, plain
 from workbench.report.names import item_title
-from workbench.report.readings import Readings
 from workbench.report.years import Amounts, Row, Years
 
-_CHART = (150.0, 7.6)
+_CHART = (138.0, 7.6)
 
 
-def loan_section(years: Years, read: Readings, column: float) -> tuple[Section, ...]:
+def loan_section(years: Years, column: float) -> tuple[Section, ...]:
     """Nothing where no loan is assumed: the first page says so."""
     loans = years.voice.deal.loans
     if not loans or not years.count:
         return ()
-    picture = draw_loan(_figures(years, read), column, *_CHART)
+    picture = draw_loan(loan_figures(years), column, *_CHART)
     blocks: list[Block] = [Subheading("Loan under price"), Figure(picture, picture.words)]
     for loan in loans:
-        blocks += [Subheading(item_title(loan, "loans")), years.table(_rows(years, loan))]
+        blocks.append(Subheading(item_title(loan, "loans")))
+        blocks += _until_repaid(years, _rows(years, loan), years.line(f"balance@{loan.id}"))
     blocks += [
         Subheading("Cover and debt yield"),
         plain("Debt service is interest and principal, without repayment at a maturity.", "small"),
-        years.table(_cover(years, len(loans) > 1)),
+        *_until_repaid(years, _cover(years, len(loans) > 1), years.line("loan_balance")),
     ]
     return (Section("Loans by year", tuple(blocks)),)
 
 
-def _figures(years: Years, read: Readings) -> LoanFigures:
-    return LoanFigures(
-        (years.result.figure("loan_amount"), *years.line("loan_balance")),
-        read.number("price"),
-        (None, *years.line("exit_price_of_year")),
-        years.voice.short_money,
-        years.voice.share,
-    )
+def _until_repaid(years: Years, rows: list[Row], balance: Amounts) -> list[Block]:
+    """The table up to the year in which the last is repaid."""
+    owed = [year for year, amount in enumerate(balance, start=1) if amount != 0]
+    last = min(max(owed, default=0) + 1, years.count)
+    if last == years.count:
+        return [years.table(rows)]
+    note = plain(f"Nothing is owed after year {last}.", "small")
+    return [replace(years, count=last).table([row.until(last) for row in rows]), note]
 
 
 def _rows(years: Years, loan: Loan) -> list[Row]:

@@ -26,7 +26,7 @@ from workbench.report.reported import statement_sections
 from workbench.report.statement import statement_section
 from workbench.report.tiers import tier_section
 from workbench.report.voice import Voice
-from workbench.report.withheld import without_names
+from workbench.report.withheld import shareable
 from workbench.report.wording import rests_on
 from workbench.report.years import Years
 from workbench.text.locale import Locale
@@ -38,7 +38,7 @@ _SHORT_TEXT = 150
 
 def build(result: Result, locale: Locale, paper: Paper | None = None) -> Document:
     """The memo of a computed deal, on the paper of its locale unless another is asked for."""
-    told = replace(result, plan=replace(result.plan, deal=without_names(result.plan.deal)))
+    told = shareable(result)
     read, voice = Readings(record(told)), Voice(told.plan.deal, locale)
     column = sheet.sheet_of(paper or locale.paper).column
     return compose(read, voice, paper or locale.paper, _working(told, read, voice, column))
@@ -95,7 +95,7 @@ def _working(result: Result, read: Readings, voice: Voice, column: float) -> tup
         *roll_section(voice),
         statement_section(years, column),
         exit_section(years),
-        *loan_section(years, read, column),
+        *loan_section(years, column),
         definition_section(years, read),
         *statement_sections(years),
         *comparable_sections(voice),

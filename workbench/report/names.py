@@ -4,7 +4,11 @@ from typing import Protocol
 
 from workbench.deal.deal import Deal
 from workbench.engine.result import Result
+from workbench.text.excerpt import excerpt
 from workbench.text.labels import ITEMS
+
+_LONGEST = 120
+"""Characters of a name in a heading or a table."""
 
 
 class Named(Protocol):
@@ -27,7 +31,8 @@ def one_line(text: str) -> str:
 
 def item_title(item: Named, of: str = "") -> str:
     """The name of an item, or its kind and id where it has none."""
-    return one_line(item.name) or f"{ITEMS.get(of, '')} {item.id}".strip().capitalize()
+    name = excerpt(item.name, _LONGEST)
+    return name or f"{ITEMS.get(of, '')} {item.id}".strip().capitalize()
 
 
 def line_title(result: Result, key: str) -> str:

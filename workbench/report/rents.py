@@ -33,14 +33,14 @@ def yearly(space: Space, rent: Rent) -> float | None:
     return amount if amount == amount else None
 
 
-def per_area(rent: Rent, area: float | None, per: str) -> float | None:
-    """A rent of one unit as so much by area and month or year; None where its area is missing."""
-    if rent.amount is None:
+def comparable(rent: Rent, area: float | None, like: Rent) -> float | None:
+    """A rent in the measure and period of another; None where an area that it takes is missing."""
+    if rent.amount is None or (rent.of != like.of and area is None):
         return None
-    amount = rent.amount
-    if rent.of == "unit":
-        if area is None:
-            return None
-        amount /= area
-    periods = {"month": 12.0, "year": 1.0}
-    return amount * periods[rent.per] / periods[per]
+    amount = rent.amount * _A_YEAR[rent.per] / _A_YEAR[like.per]
+    if rent.of == like.of or area is None:
+        return amount
+    return amount / area if rent.of == "unit" else amount * area
+
+
+_A_YEAR = {"month": 12.0, "year": 1.0}

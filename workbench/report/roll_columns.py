@@ -3,19 +3,25 @@
 import datetime
 from collections.abc import Callable, Iterator, Mapping
 from dataclasses import dataclass
+from typing import TypeAlias
 
 from workbench.deal.checks_leases import is_dated
 from workbench.deal.deal import Deal
 from workbench.deal.earn import Lease, Rent, Space
 from workbench.engine.roll import last_day
-from workbench.report.document import Align, Column
+from workbench.report.document import Column
 from workbench.report.names import item_title, one_line
 from workbench.report.rents import one_unit, rent_unit, yearly
 from workbench.report.typed import decimals_of
 from workbench.report.voice import Voice
+from workbench.text import numbers
 from workbench.text.numbers import MISSING
 
+Cell: TypeAlias = Callable[[Space, Lease | None], str]
+
 _VACANT = "no lease"
+_LONGEST = 11
+"""Characters of an amount a year; above it they are in thousands."""
 
 
 @dataclass(frozen=True)
@@ -23,7 +29,7 @@ class RollColumn:
     """A column with what stands in it; `of_space` is said once for each space."""
 
     column: Column
-    cell: Callable[[Space, Lease | None], str]
+    cell: Cell
     of_space: bool = False
     total: str = ""
 
@@ -48,20 +54,18 @@ def _space_columns(voice: Voice) -> Iterator[RollColumn]:
 
 def _lease_columns(voice: Voice) -> Iterator[RollColumn]:
     leases = [lease for space in voice.deal.spaces for lease in space.leases]
-    yield RollColumn(Column("Tenant", share=1.2), _tenant)
+    if leases:
+        yield RollColumn(Column("Tenant", share=1.2), _tenant)
     days: list[tuple[str, Callable[[Lease], datetime.date | None]]] = [
         ("Start", lambda lease: lease.start),
         ("End", lambda lease: lease.end),
-        ("Break", lambda lease: lease.break_date),
     ]
     for title, of in days:
         if any(of(lease) is not None for lease in leases):
             yield RollColumn(Column(title, fit=True), _day_cell(voice, of))
 
 
-def _day_cell(
-    voice: Voice, of: Callable[[Lease], datetime.date | None]
-) -> Callable[[Space, Lease | None], str]:
+def _day_cell(voice: Voice, of: Callable[[Lease], datetime.date | None]) -> Cell:
     def cell(space: Space, lease: Lease | None) -> str:
         day = None if lease is None else of(lease)
         return "" if day is None else voice.day(day)
@@ -70,11 +74,11 @@ def _day_cell(
 
 
 def _rent_columns(voice: Voice) -> Iterator[RollColumn]:
+    """As entered and for all units a year, of the lease and of the market."""
     spaces = voice.deal.spaces
     leased = [lease.rent for space in spaces for lease in space.leases]
     rents = [*leased, *(space.market_rent for space in spaces)]
     say = _RentWords(voice, one_unit(rents), _decimals(voice, rents))
-    money = voice.unit()
     passing = [
         yearly(space, lease.rent)
         for space in spaces
@@ -82,20 +86,26 @@ def _rent_columns(voice: Voice) -> Iterator[RollColumn]:
         if runs_at_closing(voice.deal, lease)
     ]
     market = [yearly(space, space.market_rent) for space in spaces]
-    yield RollColumn(say.column("Rent"), lambda _, lease: say.text(lease.rent) if lease else "")
-    yield _fitted(
-        f"Rent a year, {money}",
-        lambda space, lease: voice.money(yearly(space, lease.rent)) if lease else "",
-        _sum(voice, passing),
-        of_space=False,
-    )
+    totals = (_sum(passing), _sum(market))
+    scale = numbers.scale_for(totals, voice.locale, _LONGEST)
+
+    def in_year(space: Space, rent: Rent) -> str:
+        return voice.scaled(yearly(space, rent), scale)
+
+    if leased:
+        yield RollColumn(say.column("Rent"), lambda _, lease: say.text(lease.rent) if lease else "")
+        yield RollColumn(
+            Column(f"Rent a year, {voice.unit(scale)}", "right", fit=True),
+            lambda space, lease: in_year(space, lease.rent) if lease else "",
+            total=voice.scaled(totals[0], scale),
+        )
     yield RollColumn(
         say.column("Market rent"), lambda space, _: say.text(space.market_rent), of_space=True
     )
     yield _fitted(
-        f"Market rent a year, {money}",
-        lambda space, _: voice.money(yearly(space, space.market_rent)),
-        _sum(voice, market),
+        f"Market rent a year, {voice.unit(scale)}",
+        lambda space, _: in_year(space, space.market_rent),
+        voice.scaled(totals[1], scale),
     )
 
 
@@ -126,18 +136,12 @@ def _decimals(voice: Voice, rents: list[Rent]) -> dict[str, int]:
     return {of: decimals_of(voice, "money", some) for of, some in amounts.items()}
 
 
-def _fitted(
-    title: str,
-    cell: Callable[[Space, Lease | None], str],
-    total: str = "",
-    of_space: bool = True,
-    align: Align = "right",
-) -> RollColumn:
-    return RollColumn(Column(title, align, fit=True), cell, of_space, total)
+def _fitted(title: str, cell: Cell, total: str = "") -> RollColumn:
+    return RollColumn(Column(title, "right", fit=True), cell, True, total)
 
 
 def _space_name(space: Space, lease: Lease | None) -> str:
-    parts = (item_title(space), one_line(space.use))
+    parts = (item_title(space, "spaces"), one_line(space.use))
     return ", ".join(part for part in parts if part)
 
 
@@ -153,6 +157,6 @@ def runs_at_closing(deal: Deal, lease: Lease) -> bool:
     return lease.start <= closing <= last
 
 
-def _sum(voice: Voice, amounts: list[float | None]) -> str:
+def _sum(amounts: list[float | None]) -> float | None:
     known = [amount for amount in amounts if amount is not None]
-    return voice.money(sum(known) if len(known) == len(amounts) else None)
+    return sum(known) if len(known) == len(amounts) else None

@@ -7,6 +7,9 @@ from workbench.charts.shapes import Line, Role, Shape, Text, moved
 from workbench.charts.wrapping import Run, TextLine, length, wrap_runs
 from workbench.report import sheet
 
+_GOOD_PART = 0.2
+"""Of a page."""
+
 
 @dataclass(frozen=True)
 class Mark:
@@ -25,9 +28,38 @@ class Slab:
     space: float = 0.0
     keep_next: bool = False
     """Whether the next slab must stand on the same page."""
+    prefer_next: bool = False
+    """Whether it should, where all that is kept together fits one page."""
     header: tuple["Slab", ...] = ()
     """What is repeated above it where it begins a page."""
     mark: Mark | None = None
+
+
+def settled(slabs: tuple[Slab, ...], tallest: float) -> tuple[Slab, ...]:
+    """Slabs whose preferences have become orders.
+
+    Of what is too high for any page only a good beginning and end are kept together.
+    """
+    done: list[Slab] = []
+    while len(done) < len(slabs):
+        first = last = len(done)
+        while last < len(slabs) - 1 and (slabs[last].keep_next or slabs[last].prefer_next):
+            last += 1
+        done += _settled(slabs[first : last + 1], tallest)
+    return tuple(done)
+
+
+def _settled(together: tuple[Slab, ...], tallest: float) -> list[Slab]:
+    whole = stack_height(together)
+    fits = whole + sum(header.height for header in together[0].header) <= tallest
+    part = _GOOD_PART * tallest
+    done: list[Slab] = []
+    down = 0.0
+    for slab in together:
+        down += slab.height
+        kept = slab.prefer_next and (fits or down <= part or whole - down <= part)
+        done.append(replace(slab, keep_next=slab.keep_next or kept))
+    return done
 
 
 def stack_height(slabs: tuple[Slab, ...]) -> float:

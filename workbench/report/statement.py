@@ -1,12 +1,14 @@
 """The statement by year: every line of it, with what loans take, and the picture of the two."""
 
-from workbench.charts.income import IncomeFigures, draw_income
+from workbench.charts.income import draw_income
 from workbench.engine.figures import NOT_YET, STATEMENT
+from workbench.report.chart_figures import income_figures
 from workbench.report.document import Block, Figure, Section, Subheading, plain
 from workbench.report.names import item_title
 from workbench.report.years import Row, Years
 from workbench.text.locale import NO_BREAK
 
+_TITLE = "Statement by year"
 _SUMS = frozenset(
     {
         "effective_gross_income",
@@ -17,15 +19,15 @@ _SUMS = frozenset(
     }
 )
 _INDENT = 2 * NO_BREAK
-_CHART = (150.0, 7.6)
+_CHART = (138.0, 7.6)
 """Height of the picture and size of its letters."""
 
 
 def statement_section(years: Years, column: float) -> Section:
     """Income and debt service as a picture, then all lines by year."""
     if not years.count:
-        return Section("Statement by year", (plain("The hold is not known, so no years are."),))
-    picture = draw_income(_figures(years), column, *_CHART)
+        return Section(_TITLE, (plain("The hold is not known, so there are no years to show."),))
+    picture = draw_income(income_figures(years), column, *_CHART)
     blocks: tuple[Block, ...] = (
         Subheading("Income and debt service"),
         Figure(picture, picture.words),
@@ -33,18 +35,7 @@ def statement_section(years: Years, column: float) -> Section:
         plain("Amounts are signed as they add up: what is deducted is negative.", "small"),
         years.table(statement_rows(years)),
     )
-    return Section("Statement by year", blocks)
-
-
-def _figures(years: Years) -> IncomeFigures:
-    has_loan = bool(years.voice.deal.loans)
-    paid = years.line("debt_service") if has_loan else ()
-    return IncomeFigures(
-        years.line("noi"),
-        years.line("net_cash_flow"),
-        tuple(None if amount is None else -amount + 0.0 for amount in paid),
-        years.voice.short_money,
-    )
+    return Section(_TITLE, blocks)
 
 
 def statement_rows(years: Years) -> list[Row]:

@@ -58,7 +58,7 @@ def table_slabs(table: Table, room: float) -> tuple[Slab, ...]:
     for number in range(len(table.rows)):
         lines = _row(setting, number)
         if _is_kept(table, number):
-            lines[-1] = replace(lines[-1], keep_next=True)
+            lines[-1] = replace(lines[-1], prefer_next=True)
         slabs += [replace(line, header=header) for line in lines]
     return tuple(slabs)
 

@@ -1,11 +1,12 @@
 """The tiers by year: what is in hand and what is expected, as it falls and brought to today."""
 
-from workbench.charts.tiers import TierFigures, draw_tiers
+from workbench.charts.tiers import draw_tiers
+from workbench.report.chart_figures import tier_figures
 from workbench.report.document import Block, Figure, Section, Subheading, plain
 from workbench.report.readings import Readings
 from workbench.report.years import Row, Years
 
-_CHART = (150.0, 7.6)
+_CHART = (138.0, 7.6)
 
 
 def tier_section(years: Years, read: Readings, column: float) -> tuple[Section, ...]:
@@ -13,7 +14,7 @@ def tier_section(years: Years, read: Readings, column: float) -> tuple[Section, 
     if not years.count:
         return ()
     in_hand, expected = years.line("cash_in_hand"), years.line("cash_expected")
-    picture = draw_tiers(TierFigures(in_hand, expected, years.voice.short_money), column, *_CHART)
+    picture = draw_tiers(tier_figures(years), column, *_CHART)
     rows = [
         Row("In hand, as it falls", in_hand),
         Row("Expected, as it falls", expected),

@@ -85,11 +85,12 @@ def row_text(voice: Voice, declared: Input, row: Mapping[int, float]) -> str:
 
 def decimals_of(voice: Voice, unit: str, values: Iterable[float]) -> int:
     """As many decimals as the values of a row or a column need to line up."""
+    if unit == "money":
+        whole = all(voice.exact(value) == voice.exact(value, 0) for value in values)
+        return 0 if whole else voice.money_digits
     scaled = [numbers.hundredfold(value) if unit == "fraction" else value for value in values]
     most = max((_decimals(value) for value in scaled if value is not None), default=0)
-    if unit == "fraction":
-        return max(most, 1)
-    return max(most, voice.minor_digits) if most else 0
+    return max(most, 1) if unit == "fraction" else most
 
 
 def _decimals(value: float) -> int:

@@ -1,5 +1,6 @@
 """How the memo puts figures: one reader's marks, one currency, the same words everywhere."""
 
+from collections.abc import Callable, Sequence
 from dataclasses import dataclass
 from datetime import MAXYEAR, date
 
@@ -7,12 +8,14 @@ from workbench.deal.deal import Deal
 from workbench.report.cautions import NOT_STATED
 from workbench.text import numbers
 from workbench.text.currency import find_currency
+from workbench.text.excerpt import excerpt
 from workbench.text.locale import Locale
 from workbench.text.years import year_span
 
 _LONGEST_AMOUNT = 15
 """Characters of an amount in a text or table; a longer one is shortened."""
 _SHORT_AMOUNT = 11
+_SHORTEST_AMOUNT = 7
 _AREA_UNITS = {"m2": "m²", "sqft": "sq ft"}
 
 
@@ -31,30 +34,46 @@ class Voice:
 
     def priced(self, value: float | None) -> str:
         text = self.money(value)
-        currency = self.deal.conventions.currency
-        return text if text == numbers.MISSING else f"{currency}\u00a0{text}"
+        return text if text == numbers.MISSING else f"{self.unit()}\u00a0{text}"
 
     @property
-    def minor_digits(self) -> int:
-        """Decimals of the currency; two where it is not one of the list."""
+    def money_digits(self) -> int:
+        """Decimals of amounts that are not whole: two, or more where the currency has more.
+
+        Also in a currency without a smaller unit, of which a rent by area may name a part.
+        """
         currency = find_currency(self.deal.conventions.currency)
-        return 2 if currency is None else currency.digits
+        return max(2, currency.digits) if currency is not None else 2
 
     def exact(self, value: float | None, decimals: int | None = None) -> str:
-        """An amount as typed: whole, or with the decimals of its currency and what is beyond."""
-        if decimals is not None:
-            return numbers.number(value, self.locale, decimals)
-        text = numbers.trimmed(value, self.locale)
-        if self.locale.decimal in text:
-            return numbers.trimmed(value, self.locale, self.minor_digits)
-        return text
+        """An amount as typed: whole, or with the decimals of its currency."""
+        if decimals is None:
+            whole = value is None or round(value, self.money_digits) == round(value)
+            decimals = 0 if whole else self.money_digits
+        return numbers.number(value, self.locale, decimals)
 
     def scaled(self, value: float | None, scale: numbers.Scale) -> str:
-        return numbers.money(value, self.locale, scale)
+        """An amount of a table; one beyond every scale is shortened as an amount of its own."""
+        text = numbers.money(value, self.locale, scale)
+        return text if len(text) <= _LONGEST_AMOUNT else self.short_money(value)
+
+    def alike(self, *rows: Sequence[float | None]) -> Callable[[float], str]:
+        """How amounts of a scale are put: all in units, or all in thousands, millions, …"""
+        amounts = tuple(amount for row in rows for amount in row)
+        scale = numbers.scale_for(amounts, self.locale, _SHORT_AMOUNT)
+        if scale != numbers.ONE:
+            scale = numbers.scale_for(amounts, self.locale, _SHORTEST_AMOUNT)
+
+        def mark(amount: float) -> str:
+            text = numbers.trimmed(amount / scale.factor, self.locale, 0, 2)
+            text = text + scale.short if amount else text
+            return text if len(text) <= _LONGEST_AMOUNT else self.short_money(amount)
+
+        return mark
 
     def unit(self, scale: numbers.Scale = numbers.ONE) -> str:
         """What amounts are counted in: `EUR` or `EUR thousand`."""
-        return f"{self.deal.conventions.currency} {scale.name}".strip()
+        return f"{excerpt(self.deal.conventions.currency, 10)} {scale.name}".strip()
 
     @property
     def area_unit(self) -> str:

@@ -3,8 +3,10 @@
 import re
 from dataclasses import replace
 
+from workbench.deal.checks import check
 from workbench.deal.deal import Deal
 from workbench.deal.earn import Space
+from workbench.engine.result import Result
 
 WITHHELD = "name withheld"
 
@@ -19,12 +21,20 @@ _RESIDENTIAL = re.compile(
 """Words for dwellings in the languages of the locales that come with the program."""
 
 
+def shareable(result: Result) -> Result:
+    """The same figures of a deal without those names, nor in what is said to be wrong with it.
+
+    Everything in a document is made from this, so that no issue, reason or label can tell a name.
+    """
+    deal = without_names(result.plan.deal)
+    return replace(result, plan=replace(result.plan, deal=deal, issues=tuple(check(deal))))
+
+
 def without_names(deal: Deal) -> Deal:
-    """The deal as documents tell it: a name withheld where tenants may be private persons.
+    """The deal with a name withheld where tenants may be private persons.
 
     The schema has no use that says whether people live in a space, and no choice to print their
-    names, so that words decide; in doubt the name is withheld. Everything that is printed is made
-    from this deal, so that no issue or label can tell a name either.
+    names, so that words decide; in doubt the name is withheld.
     """
     spaces = tuple(_without_names(deal, space) for space in deal.spaces)
     private = {

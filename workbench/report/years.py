@@ -1,7 +1,7 @@
 """The years of the hold: what lines come to in each of them, and tables of that."""
 
 from collections.abc import Sequence
-from dataclasses import dataclass
+from dataclasses import dataclass, replace
 from datetime import MAXYEAR
 from typing import Literal, TypeAlias
 
@@ -26,6 +26,10 @@ class Row:
     values: Amounts
     unit: Unit = "money"
     strong: bool = False
+
+    def until(self, year: int) -> "Row":
+        """The same without the years after one."""
+        return replace(self, values=self.values[:year])
 
 
 @dataclass(frozen=True)

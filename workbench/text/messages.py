@@ -90,6 +90,8 @@ def word_issue(deal: Deal, issue: Issue) -> str:
     words = {name: _named(deal, value, locale) for name, value in issue.other.items()}
     low, high = _shown(issue.low, unit, locale), _shown(issue.high, unit, locale)
     words |= {"value": _shown(issue.value, unit, locale), "low": low, "high": high}
+    if issue.code == "weights":
+        words["value"] = trimmed(issue.value, locale, 0, 10)
     words["a_value"] = "a date" if unit == "date" else f"a value from {low} to {high}"
     return f"{label_of(deal, issue.path)}: {ISSUES[issue.code].format(**words)}"
 

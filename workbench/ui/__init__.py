@@ -1,0 +1,1 @@
+"""The window: pages, grids, forms and the wall, over a session."""

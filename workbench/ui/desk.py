@@ -1,0 +1,102 @@
+"""The desk: the pages over one session, each made anew when what it holds has changed."""
+
+from collections.abc import Callable
+
+from PySide6.QtCore import Qt, Signal
+from PySide6.QtWidgets import QFrame, QScrollArea, QStackedWidget, QWidget
+
+from workbench.session.session import Session
+from workbench.ui.contents import Contents, pages
+from workbench.ui.fields import AnyField
+from workbench.ui.hand_on import HandOnPage
+from workbench.ui.page import Page
+from workbench.ui.roll import RollGrid
+
+WATCHED = ("purchase", "spaces", "expenses", "other_income", "loans", "leave")
+"""Sections on which the contents of pages depend."""
+
+
+class Desk(QStackedWidget):
+    """All pages; one is shown."""
+
+    asked = Signal(object)
+    refused = Signal(object)
+
+    def __init__(self, session: Session, parent: QWidget | None = None) -> None:
+        super().__init__(parent)
+        self._session = session
+        self._contents: tuple[Contents, ...] = ()
+        self.names = tuple(one.name for one in pages(session.deal))
+        self.pages: list[QWidget] = []
+        for contents in pages(session.deal):
+            self.pages.append(self._make(contents))
+            self.addWidget(_scrolled(self.pages[-1], self))
+        self._contents = pages(session.deal)
+        session.result_changed.connect(self._on_result_changed)
+
+    def _make(self, contents: Contents) -> QWidget:
+        if contents.name == "Hand on":
+            return HandOnPage(self._session, self)
+        others: list[tuple[str, QWidget]] = []
+        if contents.name == "Earn":
+            others.append(("Rent roll", RollGrid(self._session)))
+        page = Page(self._session, contents, others, self)
+        page.asked.connect(self.asked)
+        page.refused.connect(self.refused)
+        return page
+
+    def _on_result_changed(self, result: object) -> None:
+        """Make those pages anew whose contents are other ones now."""
+        contents = pages(self._session.deal)
+        for place, (old, new) in enumerate(zip(self._contents, contents, strict=True)):
+            if old != new:
+                self._replace(place, new)
+        self._contents = contents
+
+    def _replace(self, place: int, contents: Contents) -> None:
+        shown = self.currentIndex()
+        old = self.widget(place)
+        self.pages[place] = self._make(contents)
+        self.insertWidget(place, _scrolled(self.pages[place], self))
+        self.removeWidget(old)
+        old.deleteLater()
+        self.setCurrentIndex(shown)
+
+    def find_field(self, path: str) -> tuple[int, AnyField] | None:
+        """The page and the field that show an input."""
+        for place, page in enumerate(self.pages):
+            field = page.field_of(path) if isinstance(page, Page) else None
+            if field is not None:
+                return place, field
+        return None
+
+    def find_cell(self, path: str) -> tuple[int, Callable[[], object]] | None:
+        """The page whose grid shows a year row, and how to bring the cell into sight."""
+        row, _, year = path.rpartition(".")
+        row, at = (row, int(year)) if year.isdigit() else (path, 1)
+        for place, page in enumerate(self.pages):
+            if isinstance(page, Page) and page.grid is not None and page.grid.has_row(row):
+                grid = page.grid
+                return place, _Show(page, grid.show_cell, row, at)
+        return None
+
+
+class _Show:
+    """Brings one cell of a page's grid into sight when called."""
+
+    def __init__(self, page: Page, show: Callable[[str, int], object], row: str, year: int) -> None:
+        self._page, self._show, self._row, self._year = page, show, row, year
+
+    def __call__(self) -> object:
+        self._page.show_view(0)
+        return self._show(self._row, self._year)
+
+
+def _scrolled(page: QWidget, parent: QWidget) -> QScrollArea:
+    """A page that scrolls when the window is too small for it."""
+    area = QScrollArea(parent)
+    area.setWidgetResizable(True)
+    area.setFrameShape(QFrame.Shape.NoFrame)
+    area.setFocusPolicy(Qt.FocusPolicy.NoFocus)
+    area.setWidget(page)
+    return area
