@@ -6,6 +6,7 @@ import os
 import sys
 from collections.abc import Sequence
 from io import StringIO, TextIOWrapper
+from pathlib import Path
 
 from workbench import __version__
 
@@ -16,8 +17,10 @@ def parser() -> argparse.ArgumentParser:
     """The whole command line; each command declares its own arguments."""
     whole = argparse.ArgumentParser(
         prog="groundcourse",
-        description="Underwriting of one income property: figures and documents from a deal file. "
-        "Arithmetic on your assumptions; not an appraisal and not investment advice.",
+        usage="groundcourse [DEAL] | groundcourse COMMAND …",
+        description="Underwriting of one income property. Without a command the window opens, on "
+        "the deal named or on a new one. Arithmetic on your assumptions; not an appraisal and not "
+        "investment advice.",
     )
     whole.add_argument("--version", action="version", version=f"groundcourse {__version__}")
     commands = whole.add_subparsers(dest="command", required=True, metavar="COMMAND")
@@ -32,7 +35,10 @@ def main(words: Sequence[str] | None = None) -> int:
     """Run one command; the exit status is 0 fine, 1 issues in the deal, 2 cannot be used."""
     os.environ.setdefault("OPENBLAS_NUM_THREADS", "1")
     _prepare_streams()
-    arguments = parser().parse_args(words)
+    given = list(sys.argv[1:] if words is None else words)
+    if not given or (len(given) == 1 and given[0] not in COMMANDS and given[0][0:1] != "-"):
+        return open_window(Path(given[0]) if given else None)
+    arguments = parser().parse_args(given)
     module = importlib.import_module(f"workbench.commands.{arguments.command}")
     from workbench.commands.terms import say_fault
     from workbench.files.faults import UnreadableError
@@ -52,6 +58,22 @@ def main(words: Sequence[str] | None = None) -> int:
     except OSError as error:
         _let_go_of_output()
         return say_fault(error.filename or "standard output", error)
+
+
+def open_window(path: Path | None) -> int:
+    """Open the window, on a deal if one is named; Qt is loaded only here."""
+    display = os.environ.get("DISPLAY") or os.environ.get("WAYLAND_DISPLAY")
+    own = sys.platform in ("win32", "darwin") or os.environ.get("QT_QPA_PLATFORM")
+    if not (display or own):
+        print(
+            "there is no display to open a window on; figures, check, document and working do "
+            "without one: groundcourse --help",
+            file=sys.stderr,
+        )
+        return 2
+    from workbench.ui.start import start
+
+    return start(path)
 
 
 def _prepare_streams() -> None:

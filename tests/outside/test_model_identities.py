@@ -24,7 +24,7 @@ from workbench.deal.leave import ExitMethod, Leave
 from workbench.deal.property import Timing
 from workbench.deal.purchase import Purchase
 from workbench.deal.spend import Expense, Spend
-from workbench.engine.cash import npv
+from workbench.engine.cash import mirr, npv
 from workbench.engine.loan import schedule
 from workbench.engine.plan import compile_deal
 from workbench.engine.result import Result, evaluate
@@ -220,6 +220,18 @@ def test_the_margin_is_the_present_value_of_the_flows(seed: int) -> None:
         worth = npv(rate, flows, np.arange(493) / 12)
         size = npv(rate, np.abs(flows), np.arange(493) / 12)
         assert figure(result, "margin") == pytest.approx(worth, rel=0, abs=1e-12 * size)
+
+
+def test_the_modified_rate_is_that_of_the_flows() -> None:
+    """(receipts at the end ÷ outlays at the start)^(1/N) − 1, each at its own rate."""
+    for base in random_deals(9550, 12):
+        base = changed(base, {"returns.finance": 0.07, "returns.reinvest": 0.04})
+        result, hold = evaluated(base), base.leave.hold
+        rate = result.figure("mirr_unlevered")
+        if rate is not None and hold is not None:
+            flows = result.line("unlevered_flows")[0]
+            expected = mirr(flows, 0.07, 0.04, np.arange(493) / 12, hold)
+            assert rate == pytest.approx(expected, rel=1e-11, abs=1e-12)
 
 
 def residual(flows: Array, rate: float) -> float:

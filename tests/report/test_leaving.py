@@ -11,7 +11,7 @@ from workbench.deal.deal import Deal
 from workbench.files.deal_file import deal_from_raw
 from workbench.report.document import Table
 from workbench.report.leaving import exit_section
-from workbench.report.leaving_methods import part_prices
+from workbench.report.leaving_prices import part_prices
 
 
 def table_of(deal: Deal) -> Table:

@@ -72,10 +72,8 @@ def test_sums_that_follow_one_another_stand_together() -> None:
 
 def test_a_whole_table_is_kept_together() -> None:
     rows = tuple((f"row {n}", str(n)) for n in range(9))
-    kept = [
-        slab.keep_next or slab.prefer_next
-        for slab in table_slabs(Table(COLUMNS, rows, whole=True), 300)
-    ]
+    slabs = table_slabs(Table(COLUMNS, rows, whole=True), 300)
+    kept = [slab.keep_next or slab.prefer_next for slab in slabs]
     assert kept == [True] * 9 + [False]
 
 

@@ -1,6 +1,7 @@
 """A year grid shown over a session, with the hands and eyes of a user."""
 
 from collections.abc import Sequence
+from functools import partial
 from typing import Self
 
 from PySide6.QtCore import Qt
@@ -34,6 +35,18 @@ def base(**more: object) -> Deal:
     return deal(space(10.0), **sections)
 
 
+def keep(qtbot: QtBot, widget: QWidget) -> None:
+    """Close a widget after the test, and hold it until then.
+
+    A widget that only its own circle of references holds could be collected while it is painted.
+    """
+    qtbot.addWidget(widget, before_close_func=partial(_held, widget))
+
+
+def _held(held: QWidget, closing: QWidget) -> None:
+    assert held is closing
+
+
 class Hands:
     """A grid shown over a session; keys go to whatever has the keyboard."""
 
@@ -42,7 +55,7 @@ class Hands:
         self.session = session
         self.grid = grid
         self.grid.resize(700, 420)
-        qtbot.addWidget(self.grid)
+        keep(qtbot, self.grid)
         with qtbot.waitActive(self.grid):
             self.grid.show()
             self.grid.activateWindow()
@@ -72,6 +85,9 @@ class Hands:
     def ctrl(self, key: Qt.Key, shift: bool = False) -> Self:
         keys = Qt.KeyboardModifier.ControlModifier
         return self.press(key, keys | Qt.KeyboardModifier.ShiftModifier if shift else keys)
+
+    def undo_name(self) -> str | None:
+        return self.session.undo_label
 
     def clip(self, text: str | None = None) -> str:
         """What is on the clipboard, after putting a text there if one is given."""

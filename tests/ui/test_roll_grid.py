@@ -84,7 +84,7 @@ def test_typing_in_cells(desk: RollDesk) -> None:
     assert shop.leases[0].tenant == "Cid"
     assert shop.leases[0].start == date(2026, 2, 1)
     assert shop.leases[0].end == date(2027, 11, 30)
-    assert desk.session.undo_label == "end of Shop"
+    assert desk.undo_name() == "end of Shop"
     assert desk.roll.place() == (1, END)
 
 
@@ -122,7 +122,7 @@ def test_typing_in_the_new_row_makes_a_space(desk: RollDesk) -> None:
     made = desk.session.deal.spaces[-1]
     assert (made.id, made.name, made.count) == ("s100", "Attic", 1)
     assert desk.column(SPACE) == ["Shop", "·\u00a0Shop", "Flat", "Attic", ""]
-    assert desk.session.undo_label == "space of a new row"
+    assert desk.undo_name() == "space of a new row"
 
 
 @pytest.mark.parametrize(
@@ -149,7 +149,7 @@ def test_a_bad_entry_stays_with_its_reason(
 
 def test_what_is_wrong_is_marked(desk: RollDesk) -> None:
     desk.at(0, MARKET).press(Qt.Key.Key_Delete)
-    assert desk.session.undo_label == "clear market rent of Shop"
+    assert desk.undo_name() == "clear market rent of Shop"
     text = desk.read(0, MARKET, Qt.ItemDataRole.AccessibleTextRole)
     assert text.startswith("Market rent of Shop: empty. Market rent of space s1 “Shop”: ")
 
@@ -172,7 +172,7 @@ def test_paste_of_500_rows_is_one_step_and_one_recompute(desk: RollDesk) -> None
     desk.at(3, SPACE).ctrl(Qt.Key.Key_V)
     after = desk.session.deal
     assert len(after.spaces) == 502
-    assert desk.session.undo_label == "paste 500 rows"
+    assert desk.undo_name() == "paste 500 rows"
     assert desk.session.revision == 1
     desk.bot.waitUntil(lambda: computed.count() > 0)
     assert computed.count() == 1
@@ -186,7 +186,7 @@ def test_paste_of_500_rows_is_one_step_and_one_recompute(desk: RollDesk) -> None
     assert len(desk.column(SPACE)) == 504
     desk.session.undo()
     assert desk.session.deal == start
-    assert desk.session.undo_label is None
+    assert desk.undo_name() is None
     assert desk.column(SPACE) == ["Shop", "·\u00a0Shop", "Flat", ""]
     desk.session.redo()
     assert desk.session.deal == after
@@ -201,9 +201,8 @@ def test_paste_over_rows_changes_them(desk: RollDesk) -> None:
 
 
 def test_paste_under_headings_goes_by_name(desk: RollDesk) -> None:
-    desk.clip(
-        "Tenant\tPremises\tLease end\tLease start\tDeposit\nGus\tYard\t2030-06-30\t2026-07-01\t9"
-    )
+    titles = "Tenant\tPremises\tLease end\tLease start\tDeposit"
+    desk.clip(f"{titles}\nGus\tYard\t2030-06-30\t2026-07-01\t9")
     desk.at(3, SPACE).ctrl(Qt.Key.Key_V)
     made = desk.session.deal.spaces[-1]
     assert (made.name, made.leases[0].tenant) == ("Yard", "Gus")
@@ -225,7 +224,7 @@ def test_fill_down_and_many_at_once(desk: RollDesk) -> None:
     assert [one.use for one in desk.session.deal.spaces] == ["retail", "retail"]
     desk.at(0, RENT, 1, RENT).type("30").ctrl(Qt.Key.Key_Return)
     assert [one.rent.amount for one in desk.session.deal.spaces[0].leases] == [30.0, 30.0]
-    assert desk.session.undo_label == "set rent in 2 rows"
+    assert desk.undo_name() == "set rent in 2 rows"
 
 
 def test_insert_duplicate_move_and_delete(desk: RollDesk) -> None:
@@ -237,7 +236,7 @@ def test_insert_duplicate_move_and_delete(desk: RollDesk) -> None:
     copy = desk.session.deal.spaces[1]
     assert (copy.id, copy.name) == ("s101", "Shop")
     assert [one.id for one in copy.leases] == ["e102", "e103"]
-    assert desk.session.undo_label == "duplicate a space"
+    assert desk.undo_name() == "duplicate a space"
     assert {row for row, _ in desk.roll.chosen()} == {2, 3}
     desk.at(0, SPACE).press(Qt.Key.Key_Down, Qt.KeyboardModifier.AltModifier)
     assert [one.id for one in desk.session.deal.spaces] == ["s101", "s1", "s100", "s2"]
@@ -246,13 +245,13 @@ def test_insert_duplicate_move_and_delete(desk: RollDesk) -> None:
     assert [one.id for one in desk.session.deal.spaces] == ["s1", "s101", "s100", "s2"]
     desk.at(1, SPACE).ctrl(Qt.Key.Key_Minus)
     assert [one.id for one in desk.session.deal.spaces[0].leases] == ["e1"]
-    assert desk.session.undo_label == "delete Shop"
+    assert desk.undo_name() == "delete Shop"
     desk.at(1, SPACE, 3, SPACE).ctrl(Qt.Key.Key_Minus)
     assert [one.id for one in desk.session.deal.spaces] == ["s1", "s2"]
     for _ in range(6):
         desk.session.undo()
     assert desk.session.deal == two_leases()
-    assert desk.session.undo_label is None
+    assert desk.undo_name() is None
 
 
 def test_moving_past_the_ends_says_so(desk: RollDesk) -> None:
@@ -333,6 +332,8 @@ def test_names_and_headings(desk: RollDesk) -> None:
 def test_go_to_a_path(desk: RollDesk) -> None:
     assert desk.roll.go_to("leases@e2.rent.amount")
     assert desk.roll.place() == (1, RENT)
+    assert desk.roll.go_to("leases@e1.rent.of")
+    assert desk.roll.place() == (0, RENT_PER)
     assert not desk.roll.go_to("leases@e9.rent.amount")
 
 
@@ -340,3 +341,75 @@ def test_the_choice_stays_when_rows_come_in_before_it(desk: RollDesk) -> None:
     desk.at(2, USE)
     desk.session.set("spaces", (space(1.0, identity="s50"), *desk.session.deal.spaces), "more")
     assert desk.roll.place() == (3, USE)
+
+
+def test_what_cannot_be_done_is_said(desk: RollDesk) -> None:
+    desk.at(0, BREAK).press(Qt.Key.Key_F4)
+    desk.at(0, BREAK).press(Qt.Key.Key_Delete)
+    desk.at(0, USE).ctrl(Qt.Key.Key_D)
+    desk.at(3, SPACE).ctrl(Qt.Key.Key_L, shift=True)
+    desk.at(3, SPACE).ctrl(Qt.Key.Key_D, shift=True)
+    desk.at(3, SPACE).press(Qt.Key.Key_Down, Qt.KeyboardModifier.AltModifier)
+    desk.at(2, SPACE)
+    desk.roll.commands["Take leases out, keep the spaces"].trigger()
+    assert desk.session.revision == 0
+    assert desk.said == [
+        "The rent roll holds what was typed; nothing in it is computed.",
+        "There is nothing in these cells to take out.",
+        "Choose the cell to fill from and the rows under it.",
+        "A lease needs a space; name one in the new row first.",
+        "The new row holds nothing yet; choose other rows.",
+        "The new row holds nothing yet; choose other rows.",
+        "There is no lease in the chosen rows.",
+    ]
+
+
+def test_columns_past_the_last_are_left_out(desk: RollDesk) -> None:
+    desk.clip("3\t2027-06-30\tx")
+    desk.at(0, FREE).ctrl(Qt.Key.Key_V)
+    let = desk.session.deal.spaces[0].leases[0]
+    assert (let.free_months, let.break_date) == (3, date(2027, 6, 30))
+    assert desk.said == ["Columns past the last one of the grid were left out."]
+
+
+def test_one_cell_pasted_over_many(desk: RollDesk) -> None:
+    desk.clip("office")
+    desk.at(0, USE, 2, USE).ctrl(Qt.Key.Key_V)
+    assert [one.use for one in desk.session.deal.spaces] == ["office", "office"]
+    assert desk.undo_name() == "paste use in 3 rows"
+
+
+def test_a_single_cell_takes_the_one_above(desk: RollDesk) -> None:
+    desk.at(2, USE).ctrl(Qt.Key.Key_D)
+    assert desk.session.deal.spaces[1].use == "retail"
+    assert desk.undo_name() == "fill use of Flat"
+
+
+def test_a_row_inserted_at_the_end(desk: RollDesk) -> None:
+    desk.at(3, SPACE).ctrl(Qt.Key.Key_Plus)
+    assert [one.id for one in desk.session.deal.spaces] == ["s1", "s2", "s100"]
+    desk.type("Yard").press(Qt.Key.Key_Return)
+    assert desk.session.deal.spaces[2].name == "Yard"
+
+
+def test_an_edit_elsewhere_leaves_the_roll_as_it_is(desk: RollDesk) -> None:
+    desk.row(0)
+    seen = QSignalSpy(desk.roll.model().dataChanged)
+    desk.session.set("earn.vacancy.1", 0.2, "vacancy")
+    desk.session.catch_up()
+    assert seen.count() == 0
+    desk.session.set("conventions.locale", "de-DE", "locale")
+    assert desk.row(0)[START] == "1 Jan 2026"
+
+
+def test_paste_with_empty_cells_keeps_a_new_space_at_one_unit(desk: RollDesk) -> None:
+    desk.clip("A\t\t\t50\n\nB\t\t3\t60")
+    desk.at(3, SPACE).ctrl(Qt.Key.Key_V)
+    made = desk.session.deal.spaces[2:]
+    assert [(one.name, one.count, one.area) for one in made] == [("A", 1, 50.0), ("B", 3, 60.0)]
+
+
+def test_headings_alone_paste_nothing(desk: RollDesk) -> None:
+    desk.clip("Tenant\tRent\tUnits")
+    desk.at(0, SPACE).ctrl(Qt.Key.Key_V)
+    assert desk.session.revision == 0

@@ -11,9 +11,11 @@ from PySide6.QtWidgets import QApplication, QLineEdit, QWidget
 from pytestqt.qtbot import QtBot
 
 from tests.engine.deals import deal, lease, space
-from tests.ui.hands import GROWTH, INCOME, RENT, ROWS, STATED, VACANCY, Desk, base
+from tests.ui.hands import GROWTH, INCOME, RENT, ROWS, STATED, VACANCY, Desk, base, keep
 from workbench.deal.borrow import Loan
+from workbench.deal.earn import Earn
 from workbench.deal.property import Conventions
+from workbench.deal.spend import Expense
 from workbench.session.session import Session
 from workbench.ui.grid import GridRow, InputRow, LineRow, YearGrid
 
@@ -51,7 +53,7 @@ def test_labels_come_from_the_declarations(desk: Desk) -> None:
 def test_enter_commits_and_goes_down(desk: Desk) -> None:
     desk.at(GROWTH, 2).type("1.5").press(Qt.Key.Key_Return)
     assert desk.session.deal.earn.growth == {1: 0.0, 2: 0.015}
-    assert desk.session.undo_label == "market rent growth year 2"
+    assert desk.undo_name() == "market rent growth year 2"
     assert desk.place() == (VACANCY, 2)
     assert desk.texts(GROWTH)[1] == "1.5"
 
@@ -60,7 +62,7 @@ def test_tab_commits_and_goes_right(desk: Desk) -> None:
     desk.at(VACANCY, 1).type("6").press(Qt.Key.Key_Tab).type("8%").press(Qt.Key.Key_Tab)
     assert desk.session.deal.earn.vacancy == {1: 0.06, 2: 0.08, 3: 0.07}
     assert desk.place() == (VACANCY, 3)
-    assert desk.session.undo_label == "vacancy allowance year 2"
+    assert desk.undo_name() == "vacancy allowance year 2"
 
 
 def test_escape_cancels(desk: Desk) -> None:
@@ -112,7 +114,7 @@ def test_out_of_range_is_in_the_deal_and_marked(desk: Desk) -> None:
 def test_delete_lets_a_year_follow_again_but_not_year_1(desk: Desk) -> None:
     desk.at(VACANCY, 3).press(Qt.Key.Key_Delete)
     assert desk.session.deal.earn.vacancy == {1: 0.05}
-    assert desk.session.undo_label == "back to following: vacancy allowance year 3"
+    assert desk.undo_name() == "back to following: vacancy allowance year 3"
     assert desk.said == []
     desk.at(VACANCY, 1).press(Qt.Key.Key_Delete)
     assert desk.session.deal.earn.vacancy == {1: 0.05}
@@ -262,7 +264,7 @@ def test_a_leased_space_is_in_hand(qtbot: QtBot) -> None:
 
 def test_tab_walks_along_the_row_and_out_of_the_grid(qtbot: QtBot) -> None:
     frame = QWidget()
-    qtbot.addWidget(frame)
+    keep(qtbot, frame)
     grid = YearGrid(Session(base()), ROWS, frame)
     grid.resize(700, 400)
     after = QLineEdit(frame)
@@ -275,3 +277,78 @@ def test_tab_walks_along_the_row_and_out_of_the_grid(qtbot: QtBot) -> None:
     assert grid.place() == (VACANCY, 4)
     QTest.keyClick(grid, Qt.Key.Key_Tab)
     assert QApplication.focusWidget() is after
+
+
+def test_items_bear_their_own_names(qtbot: QtBot) -> None:
+    expenses = (Expense("x1", name="Insurance", amount=12.0), Expense("x2", amount=6.0))
+    loan = Loan("l1", name="Senior", amount=500.0, rate={1: 0.06}, amortisation_months=360)
+    start = replace(base(), expenses=expenses, loans=(loan,))
+    rows: tuple[GridRow, ...] = (
+        LineRow("expense@x1"),
+        LineRow("expense@x2"),
+        InputRow("loans@l1.rate"),
+        LineRow("interest@l1"),
+        LineRow("noi", label="Net income"),
+        InputRow("spend.growth", "Growth of costs", "per cent"),
+        LineRow("debt_yield"),
+        LineRow("rent_index"),
+        LineRow("dscr_noi"),
+        LineRow("expense@x9"),
+    )
+    desk = Desk(qtbot, start, rows)
+    model, side = desk.grid.model(), Qt.Orientation.Vertical
+    labels = [str(model.headerData(row, side)) for row in range(model.rowCount())]
+    assert labels == [
+        "Insurance",
+        "Expense x2",
+        "Senior: interest rate",
+        "Senior: interest",
+        "Net income",
+        "Growth of costs",
+        "Debt yield",
+        "Index of market rent",
+        "Debt service cover on net operating income",
+        "expense@x9",
+    ]
+    assert desk.texts(0)[0] == "−12"
+    # 114 − 18 is 96; on a balance of 500 at the year's start that is 19.2 %
+    assert desk.texts(6)[0] == "19.2%"
+    assert desk.texts(7)[0] == "1.0000"
+    assert desk.texts(8)[0] == "2.67"  # 96 ÷ 12 months at 2.99775
+    assert desk.texts(9) == ["—"] * 5
+    desk.at(6, 1).ctrl(Qt.Key.Key_C)
+    assert desk.clip() == "19.2%"
+
+
+def test_stated_amounts_stay_in_single_units(qtbot: QtBot) -> None:
+    desk = Desk(qtbot, base())
+    desk.at(STATED, 1).type("12345678").press(Qt.Key.Key_Tab)
+    desk.type("12.34").press(Qt.Key.Key_Return)
+    assert desk.texts(STATED)[:2] == ["12.35m", "12.34"]
+    assert desk.grid.corner.text() == "USD thousand"
+    desk.at(STATED, 1).press(Qt.Key.Key_F2)
+    editor = desk.hand()
+    assert isinstance(editor, QLineEdit)
+    assert editor.text() == "12345678"
+
+
+def test_nothing_to_let_follow(desk: Desk) -> None:
+    desk.at(VACANCY, 2).press(Qt.Key.Key_Delete)
+    assert desk.said == ["Nothing is typed there that could follow again."]
+    assert desk.session.revision == 0
+
+
+def test_a_needed_year_1_is_marked(qtbot: QtBot) -> None:
+    desk = Desk(qtbot, base(earn=Earn()))
+    assert desk.texts(VACANCY) == [""] * 5
+    spoken = desk.read(VACANCY, 1, Qt.ItemDataRole.AccessibleTextRole)
+    assert spoken.startswith("Vacancy allowance, year 1: empty, not typed. Vacancy allowance")
+    assert "is needed" in desk.read(VACANCY, 1, Qt.ItemDataRole.ToolTipRole)
+
+
+def test_shift_enter_goes_up(desk: Desk) -> None:
+    shift = Qt.KeyboardModifier.ShiftModifier
+    desk.at(VACANCY, 2).type("6").press(Qt.Key.Key_Return, shift)
+    assert desk.place() == (GROWTH, 2)
+    desk.press(Qt.Key.Key_Return).press(Qt.Key.Key_Return, shift)
+    assert desk.place() == (GROWTH, 2)

@@ -45,7 +45,7 @@ def test_cut_is_one_step(desk: Desk) -> None:
     desk.at(VACANCY, 2, VACANCY, 3).ctrl(Qt.Key.Key_X)
     assert desk.clip() == "5%\t7%"
     assert desk.session.deal.earn.vacancy == {1: 0.05}
-    assert desk.session.undo_label == "cut vacancy allowance years 2–3"
+    assert desk.undo_name() == "cut vacancy allowance years 2–3"
     desk.session.undo()
     assert desk.session.deal == start
 
@@ -57,10 +57,10 @@ def test_paste_of_a_range_is_one_step(desk: Desk) -> None:
     assert desk.session.deal.earn.growth == {1: 0.01, 2: 0.02}
     assert desk.session.deal.drafts == {"earn.growth.3": "x"}
     assert desk.session.deal.earn.vacancy == {1: 0.06, 3: 0.085}
-    assert desk.session.undo_label == "paste 2 rows years 1–3"
+    assert desk.undo_name() == "paste 2 rows years 1–3"
     desk.session.undo()
     assert desk.session.deal == start
-    assert desk.session.undo_label is None
+    assert desk.undo_name() is None
 
 
 def test_paste_of_one_cell_goes_over_all_that_are_chosen(desk: Desk) -> None:
@@ -82,6 +82,20 @@ def test_paste_over_computed_cells_changes_nothing(desk: Desk) -> None:
     desk.at(VACANCY, 1).ctrl(Qt.Key.Key_V)
     assert desk.session.revision == 0
     assert desk.said == ["Nothing was changed. A heading takes no entry."]
+
+
+def test_pasted_fractions_are_read_in_per_cent_and_said(desk: Desk) -> None:
+    desk.clip("0.05\t0.06")
+    desk.at(VACANCY, 1).ctrl(Qt.Key.Key_V)
+    assert desk.session.deal.earn.vacancy == {1: 0.0005, 2: 0.0006, 3: 0.07}
+    assert desk.said == [
+        "Pasted rates without a per cent sign are read in per cent: 0.05 is 0.05 %."
+    ]
+    desk.clip("5\t0.5%\t0.5")
+    desk.at(VACANCY, 1).ctrl(Qt.Key.Key_V)
+    desk.clip("0")
+    desk.at(VACANCY, 1).ctrl(Qt.Key.Key_V)
+    assert len(desk.said) == 1
 
 
 def test_paste_of_nothing(desk: Desk) -> None:
@@ -109,7 +123,7 @@ def test_a_range_copied_and_pasted_back_is_the_same(qtbot: QtBot) -> None:
 def test_fill_right(desk: Desk) -> None:
     desk.at(VACANCY, 3, VACANCY, 5).ctrl(Qt.Key.Key_R)
     assert desk.session.deal.earn.vacancy == {1: 0.05, 3: 0.07, 4: 0.07, 5: 0.07}
-    assert desk.session.undo_label == "fill vacancy allowance years 4–5"
+    assert desk.undo_name() == "fill vacancy allowance years 4–5"
     desk.at(VACANCY, 3).ctrl(Qt.Key.Key_R)  # a single cell takes the one at its left
     assert desk.session.deal.earn.vacancy[3] == 0.05
     desk.at(VACANCY, 1).ctrl(Qt.Key.Key_R)
@@ -119,9 +133,38 @@ def test_fill_right(desk: Desk) -> None:
 def test_fill_down_within_one_unit(desk: Desk) -> None:
     desk.at(GROWTH, 2, VACANCY, 3).ctrl(Qt.Key.Key_D)
     assert desk.session.deal.earn.vacancy == {1: 0.05, 2: 0.0, 3: 0.0}
-    assert desk.session.undo_label == "fill vacancy allowance years 2–3"
+    assert desk.undo_name() == "fill vacancy allowance years 2–3"
     desk.at(VACANCY, 2, STATED, 2).ctrl(Qt.Key.Key_D)
     assert desk.said == ["These rows have different units; none is filled from another."]
+
+
+def test_a_single_cell_fills_from_its_neighbour(desk: Desk) -> None:
+    desk.at(VACANCY, 2).ctrl(Qt.Key.Key_D)  # takes market rent growth above, which is nil
+    assert desk.session.deal.earn.vacancy == {1: 0.05, 2: 0.0, 3: 0.07}
+    desk.at(GROWTH, 2).ctrl(Qt.Key.Key_D)
+    assert desk.said == ["Choose the row to fill from and the rows under it."]
+    desk.at(STATED, 1, STATED, 2).ctrl(Qt.Key.Key_R)
+    assert desk.said[1:] == ["There is no value to fill from."]
+
+
+def test_set_all_opens_the_editor(desk: Desk) -> None:
+    command = desk.grid.commands["Set all chosen cells: type, then Ctrl+Enter"]
+    desk.at(GROWTH, 1, GROWTH, 2)
+    command.trigger()
+    desk.type("3").ctrl(Qt.Key.Key_Return)
+    assert desk.session.deal.earn.growth == {1: 0.03, 2: 0.03}
+    desk.at(INCOME, 1)
+    command.trigger()
+    assert desk.said == ["Effective gross income is computed; F4 shows how."]
+
+
+def test_many_over_computed_cells_sets_only_the_inputs(desk: Desk) -> None:
+    desk.at(GROWTH, 1, INCOME, 1).type("2").ctrl(Qt.Key.Key_Return)
+    assert desk.session.deal.earn.growth == {1: 0.02}
+    assert desk.session.deal.stated.rent == {1: 2.0}
+    desk.at(INCOME, 1)
+    desk.grid.set_many("2")
+    assert desk.said == ["None of the chosen cells takes an entry."]
 
 
 def test_fill_over_computed_cells_is_refused(desk: Desk) -> None:
@@ -135,7 +178,7 @@ def test_ramp_between_two_ends(desk: Desk) -> None:
     desk.at(VACANCY, 5).type("8").press(Qt.Key.Key_Return)
     desk.at(VACANCY, 1, VACANCY, 5).ctrl(Qt.Key.Key_R, shift=True)
     assert desk.session.deal.earn.vacancy == {1: 0.04, 2: 0.05, 3: 0.06, 4: 0.07, 5: 0.08}
-    assert desk.session.undo_label == "ramp vacancy allowance years 1–5"
+    assert desk.undo_name() == "ramp vacancy allowance years 1–5"
     desk.at(VACANCY, 1, VACANCY, 2).ctrl(Qt.Key.Key_R, shift=True)
     assert desk.said == ["A ramp needs two ends with values and a year between them."]
 
@@ -144,7 +187,7 @@ def test_ctrl_enter_sets_all_chosen_cells(desk: Desk) -> None:
     desk.at(GROWTH, 2, VACANCY, 4).type("2.5").ctrl(Qt.Key.Key_Return)
     assert desk.session.deal.earn.growth == {1: 0.0, 2: 0.025, 3: 0.025, 4: 0.025}
     assert desk.session.deal.earn.vacancy == {1: 0.05, 2: 0.025, 3: 0.025, 4: 0.025}
-    assert desk.session.undo_label == "set 2 rows years 2–4"
+    assert desk.undo_name() == "set 2 rows years 2–4"
     assert len(desk.grid.chosen()) == 6
     assert desk.hand() is desk.grid
 
@@ -154,7 +197,7 @@ def test_delete_over_a_range_is_one_step(desk: Desk) -> None:
     assert desk.session.deal.earn.vacancy == {1: 0.05}
     desk.session.undo()
     assert desk.session.deal.earn.vacancy == {1: 0.05, 3: 0.07}
-    assert desk.session.undo_label is None
+    assert desk.undo_name() is None
 
 
 def test_the_menu_names_every_command(desk: Desk) -> None:

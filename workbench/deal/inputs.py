@@ -3,6 +3,7 @@
 import datetime
 from collections.abc import Iterator, Mapping
 from dataclasses import dataclass, fields, is_dataclass
+from functools import cached_property
 from typing import Annotated, Any, TypeAlias, get_args, get_origin, get_type_hints
 
 YearRow: TypeAlias = Mapping[int, float]
@@ -41,11 +42,11 @@ class Field:
     kind: Any
     input: Input | None
 
-    @property
+    @cached_property
     def is_row(self) -> bool:
         return self.kind == YearRow or YearRow in get_args(self.kind)
 
-    @property
+    @cached_property
     def records(self) -> tuple[type, ...]:
         """The record classes that the field holds, by itself or in a list."""
         kinds = (self.kind, *get_args(self.kind))

@@ -7,6 +7,7 @@ year row may be named whole (`earn.vacancy`) or year by year (`earn.vacancy.3`).
 import re
 from collections.abc import Mapping
 from dataclasses import is_dataclass, replace
+from functools import cache
 from typing import Any, TypeAlias
 
 from workbench.deal.deal import ID_LETTERS
@@ -62,7 +63,7 @@ def find_item(deal: Any, name: str) -> tuple[Step, ...]:
 
 def _search(record: Any, list_name: str, identity: str) -> tuple[Step, ...] | None:
     for name, field in declared(type(record)).items():
-        if name != list_name and not _may_hold(field, list_name):
+        if list_name not in _names(name, field.records):
             continue
         value = getattr(record, name)
         if is_dataclass(value):
@@ -78,13 +79,11 @@ def _search(record: Any, list_name: str, identity: str) -> tuple[Step, ...] | No
     return None
 
 
-def _may_hold(field: Field, list_name: str) -> bool:
-    """Whether a list of that name can lie below a field, by the classes alone."""
-    return any(
-        name == list_name or _may_hold(below, list_name)
-        for record in field.records
-        for name, below in declared(record).items()
-    )
+@cache
+def _names(name: str, records: tuple[type, ...]) -> frozenset[str]:
+    """The names of a field and of everything that can lie below it, by the classes alone."""
+    below = (field for record in records for field in declared(record).values())
+    return frozenset({name}).union(*(_names(field.name, field.records) for field in below))
 
 
 def value_at(record: Any, steps: tuple[Step, ...]) -> Any:

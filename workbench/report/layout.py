@@ -4,17 +4,14 @@ from collections.abc import Iterator
 from dataclasses import dataclass, field
 from itertools import pairwise
 
-from workbench.charts.lettering import CAP_HEIGHT, LEADING, printable, shorten
-from workbench.charts.shapes import Line, Picture, Shape, Text, moved
-from workbench.charts.wrapping import wrap, wrap_short
+from workbench.charts.shapes import Picture, Shape, moved
 from workbench.report import sheet
 from workbench.report.blocks import section_slabs
 from workbench.report.document import Document
+from workbench.report.edges import foot, foot_height, running_head, title_block
 from workbench.report.slabs import Mark, Slab, settled
 
 _FOOT_GAP = 14.0
-_FOOT_NUMBER = 60.0
-"""Room for the page number at the right of the foot."""
 _RUNNING_HEAD = 26.0
 
 
@@ -53,17 +50,17 @@ class _Room:
 def lay_out(document: Document) -> tuple[Page, ...]:
     """The pages of a document."""
     paper = sheet.sheet_of(document.paper)
-    head, head_height = _title_block(document, paper.column)
-    bottom = paper.height - sheet.BOTTOM - _foot_height(document, paper.column) - _FOOT_GAP
+    head, head_height = title_block(document, paper.column)
+    bottom = paper.height - sheet.BOTTOM - foot_height(document, paper.column) - _FOOT_GAP
     first = _Room(sheet.TOP + head_height, bottom)
     later = _Room(sheet.TOP + _RUNNING_HEAD, bottom)
     bodies = list(_pages(document, paper.column, first, later))
     pages: list[Page] = []
     for number, body in enumerate(bodies, start=1):
-        top = head if number == 1 else _running_head(document, paper.column)
+        top = head if number == 1 else running_head(document, paper.column)
         shapes = [moved(shape, sheet.SIDE, sheet.TOP) for shape in top]
         shapes += body.shapes
-        shapes += _foot(document, paper, f"page {number} of {len(bodies)}")
+        shapes += foot(document, paper, f"page {number} of {len(bodies)}")
         marks = [(Mark(document.kind), sheet.TOP)] if number == 1 else []
         size = (paper.width, paper.height)
         pages.append(Page(*size, tuple(shapes), marks=(*marks, *body.marks)))
@@ -103,61 +100,3 @@ def _needed(slabs: tuple[Slab, ...], tallest: float) -> float:
         need += slab.space + slab.height
     repeated = sum(header.height for header in slabs[0].header)
     return need if need + repeated <= tallest else slabs[0].height
-
-
-def _title_block(document: Document, column: float) -> tuple[list[Shape], float]:
-    """What the first page begins with, and its height."""
-    small = sheet.LOOKS["body"]
-    kind = Text(0, small * CAP_HEIGHT, document.kind, small, "start", "bold", "price")
-    dated = Text(
-        column, small * CAP_HEIGHT, printable(document.dated), small, "end", colour="muted"
-    )
-    shapes: list[Shape] = [kind, dated]
-    down = small + 4.0
-    for line in wrap_short(printable(document.title), sheet.TITLE, column, 2, "bold"):
-        down += sheet.TITLE * 1.15
-        shapes.append(Text(0, down, line, sheet.TITLE, "start", "bold"))
-    down += 4.0
-    subtitle = printable(document.subtitle)
-    for line in wrap_short(subtitle, sheet.SUBTITLE, column, 2) if subtitle else ():
-        down += sheet.SUBTITLE * LEADING
-        shapes.append(Text(0, down, line, sheet.SUBTITLE, colour="muted"))
-    down += 10.0
-    shapes.append(Line(0, down, column, down, "ink", 1.4))
-    return shapes, down + 12.0
-
-
-def _running_head(document: Document, column: float) -> list[Shape]:
-    size = sheet.NOTE
-    text = shorten(f"{document.kind} · {_one_line(document.title)}", size, column - 110)
-    return [
-        Text(0, size * CAP_HEIGHT, text, size, colour="muted"),
-        Text(column, size * CAP_HEIGHT, printable(document.dated), size, "end", colour="muted"),
-        Line(0, size + 4, column, size + 4, "rule", 0.6),
-    ]
-
-
-def _one_line(text: str) -> str:
-    return " ".join(printable(text).split())
-
-
-def _foot_lines(document: Document, column: float) -> tuple[str, ...]:
-    return wrap(printable(document.foot), sheet.FOOT, column - _FOOT_NUMBER)
-
-
-def _foot_height(document: Document, column: float) -> float:
-    return len(_foot_lines(document, column)) * sheet.FOOT * LEADING + 6.0
-
-
-def _foot(document: Document, paper: sheet.Sheet, number: str) -> list[Shape]:
-    """The caution and the page number over the lower margin."""
-    top = paper.height - sheet.BOTTOM - _foot_height(document, paper.column)
-    left, right = sheet.SIDE, paper.width - sheet.SIDE
-    shapes: list[Shape] = [Line(left, top, right, top, "rule", 0.6)]
-    down = top + 5.0
-    for line in _foot_lines(document, paper.column):
-        down += sheet.FOOT * LEADING
-        shapes.append(Text(left, down, line, sheet.FOOT, colour="muted"))
-    first = top + 5.0 + sheet.FOOT * LEADING
-    shapes.append(Text(right, first, number, sheet.FOOT, "end", colour="muted"))
-    return shapes

@@ -2,7 +2,8 @@
 
 from workbench.deal.leave import ExitPart
 from workbench.report.document import Column, Section, Table, plain
-from workbench.report.leaving_methods import Sale, Step, method_steps, part_prices
+from workbench.report.leaving_methods import Sale, Step, method_steps
+from workbench.report.leaving_prices import part_prices
 from workbench.report.wording import sentence
 from workbench.report.years import Years
 from workbench.text import numbers

@@ -1,5 +1,6 @@
 """The record of a deal's figures as plain data, the same for `figures --json` and the documents."""
 
+from collections.abc import Callable
 from typing import Any
 
 from workbench.deal.deal import Deal
@@ -19,9 +20,10 @@ def record(result: Result) -> dict[str, Any]:
     deal = result.plan.deal
     out: dict[str, Any] = {}
     reasons: dict[str, str] = {}
+    word = _wording(deal)
     for read in read_figures(result):
         _place(out, read.figure.place, read.value)
-        reasons |= _reasons(deal, read)
+        reasons |= _reasons(read, word)
     hold = out["hold_years"]
     out["hold_years"] = None if hold is None else int(hold)
     out["stack"] = _by_year(out["stack"])
@@ -54,15 +56,24 @@ def _by_year(stack: dict[str, list[float | None]]) -> list[dict[str, Any]]:
     ]
 
 
-def _reasons(deal: Deal, read: Read) -> dict[str, str]:
+def _reasons(read: Read, word: Callable[[Reason], str]) -> dict[str, str]:
     """One reason for a whole list where it is the same in each year, else one by year."""
     place = ".".join(read.figure.place)
-    worded = {year: _word(deal, reason) for year, reason in read.reasons}
+    worded = {year: word(reason) for year, reason in read.reasons}
     whole = isinstance(read.value, list) and len(worded) == len(read.value)
     if whole and len(set(worded.values())) == 1:
         return {place: next(iter(worded.values()))}
     return {place if year is None else f"{place}.{year}": text for year, text in worded.items()}
 
 
-def _word(deal: Deal, reason: Reason) -> str:
-    return word_reason(deal, reason.code, reason.words, reason.issue)
+def _wording(deal: Deal) -> Callable[[Reason], str]:
+    """Words for reasons, found once for each: one bad input is the reason of many figures."""
+    known: dict[tuple[str, str, int], str] = {}
+
+    def word(reason: Reason) -> str:
+        key = (reason.code, reason.words, id(reason.issue))
+        if key not in known:
+            known[key] = word_reason(deal, reason.code, reason.words, reason.issue)
+        return known[key]
+
+    return word

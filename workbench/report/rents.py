@@ -1,9 +1,11 @@
 """Rents as they were entered, and what they come to a year."""
 
-from collections.abc import Iterable
+from collections.abc import Iterable, Mapping
+from dataclasses import dataclass
 
 from workbench.deal.earn import Rent, Space
 from workbench.engine.roll import monthly
+from workbench.report.typed import decimals_of
 from workbench.report.voice import Voice
 from workbench.text import numbers
 
@@ -44,3 +46,31 @@ def comparable(rent: Rent, area: float | None, like: Rent) -> float | None:
 
 
 _A_YEAR = {"month": 12.0, "year": 1.0}
+
+
+@dataclass(frozen=True)
+class RentWords:
+    """Rents as entered: bare numbers under one title where all are of one measure and period."""
+
+    voice: Voice
+    unit: Rent | None
+    decimals: Mapping[str, int]
+
+    def title(self, title: str) -> str:
+        return title if self.unit is None else f"{title} {rent_unit(self.voice, self.unit)}"
+
+    def text(self, rent: Rent | None) -> str:
+        if rent is None:
+            return ""
+        of = rent_unit(self.voice, rent)
+        amount = self.voice.exact(rent.amount, self.decimals.get(of))
+        return amount if self.unit or rent.amount is None else f"{amount}\n{of}"
+
+
+def decimals_by_unit(voice: Voice, rents: Iterable[Rent]) -> dict[str, int]:
+    """By measure and period, as many decimals as its rents need to line up."""
+    amounts: dict[str, list[float]] = {}
+    for rent in rents:
+        if rent.amount is not None:
+            amounts.setdefault(rent_unit(voice, rent), []).append(rent.amount)
+    return {of: decimals_of(voice, "money", some) for of, some in amounts.items()}

@@ -1,7 +1,7 @@
 """The columns of the rent roll that a deal has something to say in."""
 
 import datetime
-from collections.abc import Callable, Iterator, Mapping
+from collections.abc import Callable, Iterator
 from dataclasses import dataclass
 from typing import TypeAlias
 
@@ -11,7 +11,7 @@ from workbench.deal.earn import Lease, Rent, Space
 from workbench.engine.roll import last_day
 from workbench.report.document import Column
 from workbench.report.names import item_title, one_line
-from workbench.report.rents import one_unit, rent_unit, yearly
+from workbench.report.rents import RentWords, decimals_by_unit, one_unit, yearly
 from workbench.report.typed import decimals_of
 from workbench.report.voice import Voice
 from workbench.text import numbers
@@ -78,7 +78,7 @@ def _rent_columns(voice: Voice) -> Iterator[RollColumn]:
     spaces = voice.deal.spaces
     leased = [lease.rent for space in spaces for lease in space.leases]
     rents = [*leased, *(space.market_rent for space in spaces)]
-    say = _RentWords(voice, one_unit(rents), _decimals(voice, rents))
+    say = RentWords(voice, one_unit(rents), decimals_by_unit(voice, rents))
     passing = [
         yearly(space, lease.rent)
         for space in spaces
@@ -86,58 +86,30 @@ def _rent_columns(voice: Voice) -> Iterator[RollColumn]:
         if runs_at_closing(voice.deal, lease)
     ]
     market = [yearly(space, space.market_rent) for space in spaces]
-    totals = (_sum(passing), _sum(market))
-    scale = numbers.scale_for(totals, voice.locale, _LONGEST)
+    sums = (_sum(passing), _sum(market))
+    scale = numbers.scale_for(sums, voice.locale, _LONGEST)
+    yearly_title = f"a year, {voice.unit(scale)}"
 
-    def in_year(space: Space, rent: Rent) -> str:
-        return voice.scaled(yearly(space, rent), scale)
+    def in_year(space: Space, rent: Rent | None) -> str:
+        return "" if rent is None else voice.scaled(yearly(space, rent), scale)
 
     if leased:
-        yield RollColumn(say.column("Rent"), lambda _, lease: say.text(lease.rent) if lease else "")
-        yield RollColumn(
-            Column(f"Rent a year, {voice.unit(scale)}", "right", fit=True),
-            lambda space, lease: in_year(space, lease.rent) if lease else "",
-            total=voice.scaled(totals[0], scale),
-        )
-    yield RollColumn(
-        say.column("Market rent"), lambda space, _: say.text(space.market_rent), of_space=True
-    )
-    yield _fitted(
-        f"Market rent a year, {voice.unit(scale)}",
-        lambda space, _: in_year(space, space.market_rent),
-        voice.scaled(totals[1], scale),
-    )
+        yield _fitted(say.title("Rent"), lambda _, lease: say.text(_rent(lease)), of_space=False)
+        total = voice.scaled(sums[0], scale)
+        title = f"Rent {yearly_title}"
+        yield _fitted(title, lambda space, lease: in_year(space, _rent(lease)), total, False)
+    yield _fitted(say.title("Market rent"), lambda space, _: say.text(space.market_rent))
+    total = voice.scaled(sums[1], scale)
+    title = f"Market rent {yearly_title}"
+    yield _fitted(title, lambda space, _: in_year(space, space.market_rent), total)
 
 
-@dataclass(frozen=True)
-class _RentWords:
-    """Rents as entered: bare numbers under one title where all are of one measure and period."""
-
-    voice: Voice
-    unit: Rent | None
-    decimals: Mapping[str, int]
-
-    def column(self, title: str) -> Column:
-        of = "" if self.unit is None else f" {rent_unit(self.voice, self.unit)}"
-        return Column(f"{title}{of}", "right", fit=True)
-
-    def text(self, rent: Rent) -> str:
-        of = rent_unit(self.voice, rent)
-        amount = self.voice.exact(rent.amount, self.decimals.get(of))
-        return amount if self.unit or rent.amount is None else f"{amount}\n{of}"
+def _rent(lease: Lease | None) -> Rent | None:
+    return None if lease is None else lease.rent
 
 
-def _decimals(voice: Voice, rents: list[Rent]) -> dict[str, int]:
-    """By measure and period, as many decimals as its rents need to line up."""
-    amounts: dict[str, list[float]] = {}
-    for rent in rents:
-        if rent.amount is not None:
-            amounts.setdefault(rent_unit(voice, rent), []).append(rent.amount)
-    return {of: decimals_of(voice, "money", some) for of, some in amounts.items()}
-
-
-def _fitted(title: str, cell: Cell, total: str = "") -> RollColumn:
-    return RollColumn(Column(title, "right", fit=True), cell, True, total)
+def _fitted(title: str, cell: Cell, total: str = "", of_space: bool = True) -> RollColumn:
+    return RollColumn(Column(title, "right", fit=True), cell, of_space, total)
 
 
 def _space_name(space: Space, lease: Lease | None) -> str:

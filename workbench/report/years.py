@@ -78,10 +78,6 @@ class Years:
         return YearLine(row.label, cells, row.strong)
 
     def _cell(self, value: float | None, unit: Unit, scale: numbers.Scale) -> str:
-        match unit:
-            case "money":
-                return self.voice.scaled(value, scale)
-            case "fraction":
-                return self.voice.share(value)
-            case "multiple":
-                return self.voice.ratio(value)
+        if unit == "money":
+            return self.voice.scaled(value, scale)
+        return self.voice.share(value) if unit == "fraction" else self.voice.ratio(value)

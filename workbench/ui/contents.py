@@ -22,11 +22,12 @@ class Row:
 
 @dataclass(frozen=True)
 class ListPart:
-    """A list edited in place: which fields of each item are shown."""
+    """A list edited in place: which fields of each item are shown; `apart` on its own view."""
 
     title: str
     name: str
     fields: tuple[str, ...]
+    apart: bool = False
 
 
 @dataclass(frozen=True)
@@ -143,6 +144,7 @@ def _earn(deal: Deal) -> Contents:
                 "Other income",
                 "other_income",
                 ("name", "amount", "basis", "in_allowance", "lease"),
+                apart=True,
             ),
         ),
         (
@@ -184,8 +186,13 @@ def _spend(deal: Deal) -> Contents:
         ("spend.reserves", "spend.reserves_basis", "spend.reserves_use"),
         ("spend.reserves_place", "spend.reserves_opening"),
         (
-            ListPart("Expenses", "expenses", ("name", "amount", "basis")),
-            ListPart("Works", "works", ("name", "amount", "date", "year", "month", "todays_money")),
+            ListPart("Expenses", "expenses", ("name", "amount", "basis"), apart=True),
+            ListPart(
+                "Works",
+                "works",
+                ("name", "amount", "date", "year", "month", "todays_money"),
+                apart=True,
+            ),
         ),
         (
             (
@@ -254,7 +261,7 @@ def _leave(deal: Deal) -> Contents:
             "returns.finance",
             "returns.reinvest",
         ),
-        (ListPart("Blend", "blend", ("method", "weight")),),
+        (ListPart("Blend", "blend", ("method", "weight"), apart=True),),
         (
             (
                 ASSUMED,

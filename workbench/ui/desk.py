@@ -1,7 +1,5 @@
 """The desk: the pages over one session, each made anew when what it holds has changed."""
 
-from collections.abc import Callable
-
 from PySide6.QtCore import Qt, Signal
 from PySide6.QtWidgets import QFrame, QScrollArea, QStackedWidget, QWidget
 
@@ -11,9 +9,6 @@ from workbench.ui.fields import AnyField
 from workbench.ui.hand_on import HandOnPage
 from workbench.ui.page import Page
 from workbench.ui.roll import RollGrid
-
-WATCHED = ("purchase", "spaces", "expenses", "other_income", "loans", "leave")
-"""Sections on which the contents of pages depend."""
 
 
 class Desk(QStackedWidget):
@@ -28,9 +23,11 @@ class Desk(QStackedWidget):
         self._contents: tuple[Contents, ...] = ()
         self.names = tuple(one.name for one in pages(session.deal))
         self.pages: list[QWidget] = []
+        self.areas: list[QScrollArea] = []
         for contents in pages(session.deal):
             self.pages.append(self._make(contents))
-            self.addWidget(_scrolled(self.pages[-1], self))
+            self.areas.append(_scrolled(self.pages[-1], self))
+            self.addWidget(self.areas[-1])
         self._contents = pages(session.deal)
         session.result_changed.connect(self._on_result_changed)
 
@@ -55,12 +52,19 @@ class Desk(QStackedWidget):
 
     def _replace(self, place: int, contents: Contents) -> None:
         shown = self.currentIndex()
-        old = self.widget(place)
+        old = self.areas[place]
         self.pages[place] = self._make(contents)
-        self.insertWidget(place, _scrolled(self.pages[place], self))
+        self.areas[place] = _scrolled(self.pages[place], self)
+        self.insertWidget(place, self.areas[place])
         self.removeWidget(old)
         old.deleteLater()
         self.setCurrentIndex(shown)
+
+    def close_down(self) -> None:
+        """End what runs beside the window."""
+        for page in self.pages:
+            if isinstance(page, HandOnPage):
+                page.close_down()
 
     def find_field(self, path: str) -> tuple[int, AnyField] | None:
         """The page and the field that show an input."""
@@ -70,26 +74,15 @@ class Desk(QStackedWidget):
                 return place, field
         return None
 
-    def find_cell(self, path: str) -> tuple[int, Callable[[], object]] | None:
-        """The page whose grid shows a year row, and how to bring the cell into sight."""
+    def go_to_cell(self, path: str) -> int | None:
+        """The page whose grid shows an input by year, with the cell in sight; None if none does."""
         row, _, year = path.rpartition(".")
         row, at = (row, int(year)) if year.isdigit() else (path, 1)
         for place, page in enumerate(self.pages):
-            if isinstance(page, Page) and page.grid is not None and page.grid.has_row(row):
-                grid = page.grid
-                return place, _Show(page, grid.show_cell, row, at)
+            if isinstance(page, Page) and page.grid is not None and page.grid.go_to(row, at):
+                page.show_view(0)
+                return place
         return None
-
-
-class _Show:
-    """Brings one cell of a page's grid into sight when called."""
-
-    def __init__(self, page: Page, show: Callable[[str, int], object], row: str, year: int) -> None:
-        self._page, self._show, self._row, self._year = page, show, row, year
-
-    def __call__(self) -> object:
-        self._page.show_view(0)
-        return self._show(self._row, self._year)
 
 
 def _scrolled(page: QWidget, parent: QWidget) -> QScrollArea:

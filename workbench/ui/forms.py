@@ -117,13 +117,19 @@ class ItemRows(QWidget):
     """The items of one list, a row of fields each, with buttons to add and to remove."""
 
     def __init__(
-        self, session: Session, list_name: str, names: Sequence[str], parent: QWidget | None = None
+        self,
+        session: Session,
+        list_name: str,
+        names: Sequence[str],
+        parent: QWidget | None = None,
+        tallest: int = 220,
     ) -> None:
         super().__init__(parent)
         self._session = session
         self._list = list_name
         self._names = tuple(names)
         self._ids: tuple[str, ...] = ()
+        self._tallest = tallest
         self.fields: list[AnyField] = []
         column = QVBoxLayout(self)
         column.setContentsMargins(0, 0, 0, 0)
@@ -169,7 +175,7 @@ class ItemRows(QWidget):
             self._add_row(inside, grid, row, identity)
         self._area.setWidget(inside)
         height = inside.sizeHint().height() + 2
-        self._area.setMaximumHeight(min(height, 220))
+        self._area.setMaximumHeight(min(height, self._tallest))
         self._area.setMinimumHeight(min(height, 120))
 
     def _add_row(self, inside: QWidget, grid: QGridLayout, row: int, identity: str) -> None:

@@ -50,7 +50,7 @@ class Menus(QObject):
         self._add_files()
         dark = self.actions["Dark"]
         dark.setCheckable(True)
-        dark.setChecked(window.settings.value("looks/dark", False, type=bool))
+        dark.setChecked(bool(window.settings.value("looks/dark", False, type=bool)))
 
     def _commands(self) -> list[Command]:
         window = self._window

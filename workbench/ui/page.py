@@ -9,7 +9,7 @@ from workbench.engine.result import Result
 from workbench.session.session import Session
 from workbench.session.typed import locale_of
 from workbench.text.numbers import compact
-from workbench.ui.contents import Contents
+from workbench.ui.contents import Contents, ListPart
 from workbench.ui.fields import AnyField
 from workbench.ui.forms import Form, ItemRows
 from workbench.ui.grid import Band, GridRow, InputRow, LineRow, YearGrid
@@ -32,16 +32,18 @@ class Page(QWidget):
         self._session = session
         self.contents = contents
         self.setAccessibleName(contents.name)
+        self._apart = [part for part in contents.lists if part.apart]
+        self._others = [*others, *((part.title, QWidget(self)) for part in self._apart)]
         column = QVBoxLayout(self)
         column.setContentsMargins(12, 8, 12, 8)
         column.setSpacing(6)
-        column.addLayout(self._head(others))
+        column.addLayout(self._head(self._others))
         self._views: list[QWidget] = []
         self.form: Form | None = None
         self.lists: list[ItemRows] = []
         self.grid: YearGrid | None = None
         column.addWidget(self._main_view(), 1)
-        for _, view in others:
+        for _, view in self._others:
             view.setParent(self)
             self._views.append(view)
             view.setVisible(False)
@@ -53,9 +55,9 @@ class Page(QWidget):
     def _head(self, others: Sequence[tuple[str, QWidget]]) -> QHBoxLayout:
         row = QHBoxLayout()
         title = QLabel(self.contents.name, self)
-        title.setProperty("role", "title")
+        title.setProperty("role", "heading")
         self._headline = QLabel("", self)
-        self._headline.setProperty("role", "muted")
+        self._headline.setProperty("role", "headline")
         row.addWidget(title)
         row.addWidget(self._headline)
         row.addStretch(1)
@@ -80,8 +82,11 @@ class Page(QWidget):
             self.form = Form(self._session, self.contents.first, self.contents.more, main)
             column.addWidget(self.form)
         for part in self.contents.lists:
+            if part.apart:
+                self._add_list_view(part)
+                continue
             heading = QLabel(part.title, main)
-            heading.setProperty("role", "heading")
+            heading.setProperty("role", "subheading")
             column.addWidget(heading)
             rows = ItemRows(self._session, part.name, part.fields, main)
             self.lists.append(rows)
@@ -95,6 +100,16 @@ class Page(QWidget):
             column.addStretch(1)
         self._views.append(main)
         return main
+
+    def _add_list_view(self, part: ListPart) -> None:
+        """A list on a view of its own."""
+        view = next(view for title, view in self._others if title == part.title)
+        column = QVBoxLayout(view)
+        column.setContentsMargins(0, 0, 0, 0)
+        rows = ItemRows(self._session, part.name, part.fields, view, tallest=10_000)
+        self.lists.append(rows)
+        column.addWidget(rows)
+        column.addStretch(1)
 
     def show_view(self, place: int) -> None:
         """Show one of the page's views."""
@@ -111,7 +126,8 @@ class Page(QWidget):
             fields = (field for rows in self.lists for field in rows.fields)
             found = next((field for field in fields if field.path == path), None)
         if found is not None:
-            self.show_view(0)
+            holder = (place for place, view in enumerate(self._views) if view.isAncestorOf(found))
+            self.show_view(next(holder, 0))
         return found
 
     def _on_deal_changed(self, revision: int) -> None:

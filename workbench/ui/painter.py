@@ -8,7 +8,6 @@ from PySide6.QtCore import (
     QByteArray,
     QIODevice,
     QLineF,
-    QMimeData,
     QPointF,
     QRectF,
     QSize,
@@ -100,11 +99,12 @@ def to_svg(picture: Picture, palette: Palette = PRINT) -> bytes:
 
 
 def copy_picture(picture: Picture, palette: Palette = PRINT) -> None:
-    """Put the picture on the clipboard, as dots and as shapes: what is pasted into may choose."""
-    data = QMimeData()
-    data.setImageData(to_image(picture, palette))
-    data.setData("image/svg+xml", QByteArray(to_svg(picture, palette)))
-    QGuiApplication.clipboard().setMimeData(data)
+    """Put the picture on the clipboard.
+
+    As an image alone: data of several kinds would be an object of Python's, which Qt destroys
+    after Python has ended, and the process would break off.
+    """
+    QGuiApplication.clipboard().setImage(to_image(picture, palette))
 
 
 class _Kept:

@@ -11,7 +11,7 @@ WIDTH = 108
 class Rail(QWidget):
     """A button for each page; the one shown is pressed in."""
 
-    chosen = Signal(object)
+    chosen = Signal(int)
     """A page is wanted: carries its place."""
 
     def __init__(self, names: Sequence[str], parent: QWidget | None = None) -> None:

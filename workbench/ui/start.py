@@ -1,7 +1,6 @@
 """Starting the window: the application, its looks, the deal, and what was left behind."""
 
 import gc
-import os
 import sys
 import traceback
 from pathlib import Path
@@ -17,13 +16,6 @@ from workbench.session.session import Session
 from workbench.ui.about import AboutDialog
 from workbench.ui.theme import apply_theme, load_font, system_prefers_dark
 from workbench.ui.window import Window
-
-
-def has_display() -> bool:
-    """Whether a window can be opened here at all."""
-    if sys.platform in ("win32", "darwin") or os.environ.get("QT_QPA_PLATFORM"):
-        return True
-    return bool(os.environ.get("DISPLAY") or os.environ.get("WAYLAND_DISPLAY"))
 
 
 def recovery_folder() -> Path:
@@ -49,7 +41,7 @@ def start(path: Path | None) -> int:
     app.setOrganizationName("Groundcourse")
     load_font()
     settings = QSettings()
-    dark = settings.value("looks/dark", system_prefers_dark(app), type=bool)
+    dark = bool(settings.value("looks/dark", system_prefers_dark(app), type=bool))
     apply_theme(app, dark)
     window = make_window(settings, recovery_folder())
     sys.excepthook = _Hook(window)

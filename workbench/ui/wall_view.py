@@ -97,15 +97,18 @@ class WallView(PictureView):
         super().showEvent(event)
         if self.window() is not self and not isinstance(self.window(), Opened):
             self.window().installEventFilter(self)
-            self.set_narrow(self.window().width() < NARROW_BELOW)
+            self._fit_window()
         self._catch_up()
 
     def eventFilter(self, watched: QObject, event: QEvent) -> bool:
         if event.type() == QEvent.Type.Resize and watched is self.window():
-            narrow = self.window().width() < NARROW_BELOW
-            if narrow != self.narrow:
-                self.set_narrow(narrow)
+            self._fit_window()
         return super().eventFilter(watched, event)
+
+    def _fit_window(self) -> None:
+        narrow = self.window().width() < NARROW_BELOW
+        if narrow != self.narrow:
+            self.set_narrow(narrow)
 
     def _on_asked_within(self, what: object) -> None:
         if self._opened is not None:

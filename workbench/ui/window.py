@@ -121,10 +121,9 @@ class Window(QMainWindow):
             self.show_page(found[0])
             found[1].setFocus(Qt.FocusReason.ShortcutFocusReason)
             return
-        cell = self.desk.find_cell(path)
-        if cell is not None:
-            self.show_page(cell[0])
-            cell[1]()
+        place = self.desk.go_to_cell(path)
+        if place is not None:
+            self.show_page(place)
             return
         self.say(f"{path} is edited in the rent roll, or is not shown in this window yet")
 
@@ -166,8 +165,11 @@ class Window(QMainWindow):
         self._show_state(0)
 
     def recent(self) -> list[str]:
+        """The files opened or saved last, the newest first."""
         held = self.settings.value("files/recent", [])
-        return [held] if isinstance(held, str) else [str(one) for one in held or []]
+        if isinstance(held, list):
+            return [str(one) for one in held]
+        return [held] if isinstance(held, str) else []
 
     def new_deal(self) -> None:
         if self.may_leave():
@@ -244,6 +246,7 @@ class Window(QMainWindow):
             event.ignore()
             return
         self.settings.setValue("window/geometry", self.saveGeometry())
+        self.desk.close_down()
         self.file.forget()
         event.accept()
 

@@ -83,7 +83,7 @@ class WorkingPanel(QWidget):
         if kind == "input":
             self.jumped.emit(rest)
             return
-        key, _, year = rest.partition("|")
+        key, _, year = rest.partition(",")
         self.show_working(key, int(year) if year else None)
 
 
@@ -121,7 +121,7 @@ def _link(operand: Operand) -> str:
         year = f".{operand.at}" if operand.span == "year" else ""
         return f"input:{operand.key}{year}"
     if operand.kind == "line" and operand.span in ("year", "once"):
-        return f"line:{operand.key}|{operand.at or ''}"
+        return f"line:{operand.key},{operand.at or ''}"
     return ""
 
 

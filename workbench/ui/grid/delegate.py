@@ -152,7 +152,7 @@ def _paint_mark(painter: QPainter, rect: QRect, mark: str, colour: QColor) -> No
         corner = rect.topRight() + QPoint(1, 0)
         points = [corner, corner - QPoint(CORNER, 0), corner + QPoint(0, CORNER)]
     else:
-        middle = QPoint(rect.left() + BADGE + 1, rect.center().y() + 1)
+        middle = QPoint(rect.left() + PADDING + BADGE, rect.center().y() + 1)
         steps = ((0, -BADGE), (BADGE, 0), (0, BADGE), (-BADGE, 0))
         points = [middle + QPoint(x, y) for x, y in steps]
     painter.drawPolygon(QPolygon(points))

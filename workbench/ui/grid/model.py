@@ -5,6 +5,7 @@ from collections.abc import Sequence
 from PySide6.QtCore import QModelIndex, QObject, Qt
 
 from workbench.session.session import Session
+from workbench.text.entry import Taken, parse_number
 from workbench.ui.grid.cell import Cell
 from workbench.ui.grid.cells import RIGHT, CellsModel, Entered, Index, Place, block_entries
 from workbench.ui.grid.edits import YearEntry, step_name, with_entries
@@ -154,12 +155,24 @@ class YearModel(CellsModel):
         fit = [
             one for one in entries if one.row < self.rowCount() and one.column < self.columnCount()
         ]
+        before = self.session.deal
         self.enter(fit, "paste")
+        if self.session.deal is not before and self._bare_fractions(fit):
+            self.said.emit(
+                "Pasted rates without a per cent sign are read in per cent: 0.05 is 0.05 %."
+            )
         if len(fit) < len(entries):
             count = len(entries) - len(fit)
             lie = "1 cell lies" if count == 1 else f"{count} cells lie"
             were = "was" if count == 1 else "were"
             self.said.emit(f"{lie} outside the grid and {were} left out.")
+
+    def _bare_fractions(self, entries: Sequence[Entered]) -> bool:
+        """Whether rates were pasted that look as if they were meant as fractions of one."""
+        texts = [one.text for one in entries if self.sheet.percent(self.sheet.rows[one.row])]
+        read = [parse_number(text, self.sheet.locale) for text in texts if "%" not in text]
+        values = [one.value for one in read if isinstance(one, Taken) and one.value]
+        return bool(values) and all(abs(value) < 1 for value in values)
 
     def follow(self) -> None:
         """Show the deal and the figures as they stand now."""

@@ -103,8 +103,9 @@ def _with_item(deal: Deal, path: str, label: str) -> str:
         return label
     try:
         title = getattr(value_at(deal, find_item(deal, head)), "name", "")
-        name = title or item_name(deal, head)
+        words = item_name(deal, head)
     except UnknownPathError:
         return label
-    plain = "." not in path and head.partition("@")[0] in ("expenses", "other_income", "works")
-    return name if plain and title else f"{name}: {in_sentence(label)}"
+    name = title or words[0].upper() + words[1:]
+    is_sum = "." not in path and head.partition("@")[0] in LISTS.values()
+    return name if is_sum else f"{name}: {in_sentence(label)}"

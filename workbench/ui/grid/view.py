@@ -7,8 +7,7 @@ from PySide6.QtGui import QFontMetrics, QResizeEvent
 from PySide6.QtWidgets import QWidget
 
 from workbench.session.session import Session
-from workbench.ui.grid.cells import Place
-from workbench.ui.grid.edits import ramp
+from workbench.ui.grid.fills import Filled, filled_down, filled_right, ramped
 from workbench.ui.grid.header import PADDING
 from workbench.ui.grid.model import YearModel
 from workbench.ui.grid.rows import GridRow, InputRow, name_of, unit_of_row
@@ -17,7 +16,7 @@ from workbench.ui.grid.table import Command, Table
 from workbench.ui.theme import YEAR_WIDTH
 
 WIDEST_YEAR = 96
-USUAL_LABELS = 156
+USUAL_LABELS = 166
 WIDEST_LABELS = 260
 WIDEST_AMOUNT = "8,888,888"
 
@@ -79,70 +78,28 @@ class YearGrid(Table):
 
     def fill_right(self) -> None:
         """Put the first chosen year of each row into the other chosen ones."""
-        by_row = self._inputs_by_row()
-        if not by_row:
-            return
-        if all(len(columns) == 1 for columns in by_row.values()):
-            by_row = {
-                row: [columns[0] - 1, columns[0]]
-                for row, columns in by_row.items()
-                if columns[0] > 0
-            }
-            if not by_row:
-                self.refused.emit("Choose the cell to fill from and the years to its right.")
-                return
-        values: dict[Place, float | str | None] = {}
-        for row, columns in by_row.items():
-            value = self._value(row, columns[0])
-            values |= {(row, column): value for column in columns[1:] if value is not None}
-        self._put("fill", values, "There is no value to fill from.")
+        chosen = self._inputs_by_row()
+        if chosen:
+            self._put("fill", filled_right(chosen, self._value))
 
     def fill_down(self) -> None:
         """Put the topmost chosen row into the other chosen ones; they must have one unit."""
-        by_row = self._inputs_by_row()
-        if not by_row:
-            return
-        if len(by_row) == 1:
-            row, columns = next(iter(by_row.items()))
-            if row > 0 and isinstance(self.rows[row - 1], InputRow):
-                by_row = {row - 1: columns, row: columns}
-        if len(by_row) < 2:
-            self.refused.emit("Choose the row to fill from and the rows under it.")
-            return
-        deal = self._years.session.deal
-        if len({unit_of_row(self.rows[row], deal) for row in by_row}) > 1:
-            self.refused.emit("These rows have different units; none is filled from another.")
-            return
-        first, *below = by_row
-        values: dict[Place, float | str | None] = {}
-        for row in below:
-            for column in by_row[row]:
-                value = self._value(first, column)
-                if value is not None:
-                    values[row, column] = value
-        self._put("fill", values, "There is no value to fill from.")
+        chosen, deal = self._inputs_by_row(), self._years.session.deal
+        units = [unit_of_row(row, deal) if isinstance(row, InputRow) else None for row in self.rows]
+        if chosen:
+            self._put("fill", filled_down(chosen, self._value, units))
 
     def ramp(self) -> None:
         """Equal steps between the first and the last chosen year of each row."""
-        values: dict[Place, float | str | None] = {}
-        by_row = self._inputs_by_row()
-        if not by_row:
-            return
-        for row, columns in by_row.items():
-            span = range(columns[0], columns[-1] + 1)
-            first, last = self._value(row, span[0]), self._value(row, span[-1])
-            if len(span) < 3 or first is None or last is None:
-                self.refused.emit("A ramp needs two ends with values and a year between them.")
-                return
-            steps = ramp(first, last, len(span))
-            values |= {(row, column): step for column, step in zip(span, steps, strict=True)}
-        self._put("ramp", values, "A ramp needs two ends with values and a year between them.")
+        chosen = self._inputs_by_row()
+        if chosen:
+            self._put("ramp", ramped(chosen, self._value))
 
-    def _put(self, verb: str, values: dict[Place, float | str | None], otherwise: str) -> None:
-        if values:
-            self._years.put(verb, values)
+    def _put(self, verb: str, values: Filled | str) -> None:
+        if isinstance(values, str):
+            self.refused.emit(values)
         else:
-            self.refused.emit(otherwise)
+            self._years.put(verb, dict(values))
 
     def _inputs_by_row(self) -> dict[int, list[int]]:
         """The chosen columns of each input row; says so where a chosen row is none."""
@@ -186,7 +143,7 @@ class YearGrid(Table):
         needed = QFontMetrics(font).horizontalAdvance(WIDEST_AMOUNT) + 2 * PADDING + 1
         least, count = max(YEAR_WIDTH, needed), self._years.sheet.years
         bar = self.verticalScrollBar()
-        room = self.width() - (bar.sizeHint().width() if bar.isVisible() else 0)
+        room = self.width() - (bar.sizeHint().width() if bar.maximum() > 0 else 0)
         wanted = min(self.labels.wanted_width(), WIDEST_LABELS)
         wide = min(wanted, max(USUAL_LABELS, room - count * least))
         self.labels.setFixedWidth(wide)
