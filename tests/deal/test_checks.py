@@ -215,7 +215,12 @@ def test_a_second_check_looks_at_what_changed_alone() -> None:
 
 @pytest.mark.parametrize(
     ("path", "value"),
-    [("property.pictures", ("f" * 64,)), ("pictures", {}), ("next_id", 3), ("spaces", ())],
+    [
+        ("property.pictures", ("f" * 64,)),
+        ("pictures", {"f" * 64: "AAAA"}),
+        ("next_id", 3),
+        ("spaces", ()),
+    ],
 )
 def test_a_second_check_misses_nothing(path: str, value: Any) -> None:
     deal = set_value(FULLEST, path, value)

@@ -93,16 +93,17 @@ def test_drafts_are_kept_and_go_with_a_good_value(qtbot: QtBot) -> None:
 
 def test_modified_is_about_the_deal_not_the_history(qtbot: QtBot) -> None:
     session = Session(FLATS)
-    assert not session.modified
+    seen = [session.modified]
     session.set("leave.hold", 7, "hold")
-    assert session.modified
+    seen.append(session.modified)
     session.undo()
-    assert not session.modified
+    seen.append(session.modified)
     session.redo()
     session.mark_clean()
-    assert not session.modified
+    seen.append(session.modified)
     session.undo()
-    assert session.modified
+    seen.append(session.modified)
+    assert seen == [False, True, False, False, True]
 
 
 def test_a_change_may_be_any_function_of_the_deal(qtbot: QtBot) -> None:

@@ -168,4 +168,7 @@ def test_the_roll_has_no_sideways_scroll_on_a_wide_desk(qtbot: QtBot) -> None:
     grid = RollGrid(Session(read_deal(sample_deals() / "weidenufer-parade.deal")))
     shown_in(qtbot, grid, 1280)
     assert not grid.horizontalScrollBar().isVisible()
+    grid.resize(1900, 540)
+    assert grid.columnWidth(0) > 300
+    assert not grid.horizontalScrollBar().isVisible()
     assert grid.model().headerData(0, Qt.Orientation.Horizontal) == "Space"

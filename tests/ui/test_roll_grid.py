@@ -413,3 +413,10 @@ def test_headings_alone_paste_nothing(desk: RollDesk) -> None:
     desk.clip("Tenant\tRent\tUnits")
     desk.at(0, SPACE).ctrl(Qt.Key.Key_V)
     assert desk.session.revision == 0
+
+
+def test_a_draft_kept_elsewhere_is_shown(desk: RollDesk) -> None:
+    assert desk.row(0)[UNITS] == "1"
+    desk.session.keep_draft("spaces@s1.count", "many", "units")
+    assert desk.row(0)[UNITS] == "many"
+    assert desk.row(1)[UNITS] == "many"

@@ -6,6 +6,7 @@ from pathlib import Path
 import pytest
 from PySide6.QtCore import QMimeData, QPointF, QSettings, Qt, QUrl
 from PySide6.QtGui import QDropEvent
+from PySide6.QtTest import QTest
 from PySide6.QtWidgets import QLineEdit, QMessageBox, QWidget
 from pytestqt.qtbot import QtBot
 
@@ -46,19 +47,19 @@ def field(window: Window, path: str) -> QLineEdit:
     return found[1]
 
 
-def type_into(qtbot: QtBot, window: Window, path: str, text: str) -> None:
+def type_into(window: Window, path: str, text: str) -> None:
     box = field(window, path)
     box.setFocus()
     box.selectAll()
-    qtbot.keyClicks(box, text)
-    qtbot.keyClick(box, Qt.Key.Key_Tab)
+    QTest.keyClicks(box, text)
+    QTest.keyClick(box, Qt.Key.Key_Tab)
     window.session.catch_up()
 
 
-def test_eight_numbers_make_a_wall(qtbot: QtBot, window: Window) -> None:
+def test_eight_numbers_make_a_wall(window: Window) -> None:
     assert window.strip.readings["value"].figure.text() == "—"
     for path, text in zip(EIGHT, NUMBERS, strict=True):
-        type_into(qtbot, window, path, text)
+        type_into(window, path, text)
     deal = window.session.deal
     assert deal.purchase.price == 1_200_000
     assert deal.spaces[0].market_rent.amount == 11_400
@@ -77,7 +78,7 @@ def test_eight_numbers_make_a_wall(qtbot: QtBot, window: Window) -> None:
     assert window.session.deal == deal
 
 
-def test_each_keystroke_that_parses_moves_the_value(qtbot: QtBot, window: Window) -> None:
+def test_each_keystroke_that_parses_moves_the_value(window: Window) -> None:
     window.file.open(FLATS)
     window.session.catch_up()
     box = field(window, "leave.exit_yield")
@@ -85,7 +86,7 @@ def test_each_keystroke_that_parses_moves_the_value(qtbot: QtBot, window: Window
     box.selectAll()
     seen = []
     for letter in "6.25":
-        qtbot.keyClicks(box, letter)
+        QTest.keyClicks(box, letter)
         window.session.catch_up()
         seen.append(window.session.deal.leave.exit_yield)
     assert seen == [0.06, 0.06, 0.062, 0.0625]
@@ -94,37 +95,37 @@ def test_each_keystroke_that_parses_moves_the_value(qtbot: QtBot, window: Window
     assert window.session.deal.leave.exit_yield == read_deal(FLATS).leave.exit_yield
 
 
-def test_mistakes_are_kept_and_told(qtbot: QtBot, window: Window) -> None:
+def test_mistakes_are_kept_and_told(window: Window) -> None:
     window.file.open(FLATS)
-    type_into(qtbot, window, "leave.selling_cost", "abc")
+    type_into(window, "leave.selling_cost", "abc")
     assert window.session.deal.drafts == {"leave.selling_cost": "abc"}
     assert window.strip.faults.text() == "1 to mend"
     box = field(window, "leave.selling_cost")
     assert box.text() == "abc" and box.property("fault") is True
-    type_into(qtbot, window, "leave.selling_cost", "150")
+    type_into(window, "leave.selling_cost", "150")
     assert window.session.deal.leave.selling_cost == 1.5
     assert window.strip.readings["value"].figure.text() == "—"
     window.show_faults()
     assert "Selling cost: 150%" in window._effect.text()
     assert "0% to 100%" in window._effect.text()
-    type_into(qtbot, window, "leave.selling_cost", "3")
+    type_into(window, "leave.selling_cost", "3")
     assert window.strip.faults.text() == ""
-    type_into(qtbot, window, "leave.hold", "7.5")
+    type_into(window, "leave.hold", "7.5")
     assert window.session.deal.leave.hold == 7  # the last keystroke that was a whole number
     assert window.session.deal.drafts == {"leave.hold": "7.5"}
 
 
-def test_a_loan_is_added_and_removed(qtbot: QtBot, window: Window) -> None:
+def test_a_loan_is_added_and_removed(window: Window) -> None:
     window.file.open(sample_deals() / "weidenufer-parade.deal")
     window.session.catch_up()
     borrow = window.desk.pages[3]
     assert isinstance(borrow, Page)
     before = window.session.result.figure("equity")
-    qtbot.mouseClick(borrow.lists[0]._add, Qt.MouseButton.LeftButton)
+    QTest.mouseClick(borrow.lists[0]._add, Qt.MouseButton.LeftButton)
     window.session.catch_up()
     loan = window.session.deal.loans[-1]
-    type_into(qtbot, window, f"loans@{loan.id}.amount", "100000")
-    type_into(qtbot, window, f"loans@{loan.id}.rate.1", "5")
+    type_into(window, f"loans@{loan.id}.amount", "100000")
+    type_into(window, f"loans@{loan.id}.rate.1", "5")
     after = window.session.result.figure("equity")
     assert before is not None and after == before - 100_000
     assert window.session.deal.loans[-1].rate == {1: 0.05}
@@ -134,10 +135,10 @@ def test_a_loan_is_added_and_removed(qtbot: QtBot, window: Window) -> None:
     assert window.session.result.figure("equity") == before
 
 
-def test_the_working_opens_leads_on_and_jumps_to_the_input(qtbot: QtBot, window: Window) -> None:
+def test_the_working_opens_leads_on_and_jumps_to_the_input(window: Window) -> None:
     window.file.open(FLATS)
     window.session.catch_up()
-    qtbot.mouseClick(window.strip.readings["exit_value_share"], Qt.MouseButton.LeftButton)
+    QTest.mouseClick(window.strip.readings["exit_value_share"], Qt.MouseButton.LeftButton)
     assert window.working.isVisible()
     text = window.working.text.toPlainText()
     assert text.startswith("Exit-value share") and "Present value of the net exit" in text
@@ -164,7 +165,7 @@ def test_every_page_opens_for_every_sample(window: Window) -> None:
 
 
 def test_save_drop_and_refuse(
-    qtbot: QtBot, window: Window, tmp_path: Path, monkeypatch: pytest.MonkeyPatch
+    window: Window, tmp_path: Path, monkeypatch: pytest.MonkeyPatch
 ) -> None:
     said: list[str] = []
     monkeypatch.setattr(QMessageBox, "warning", lambda *words: said.append(words[2]))
@@ -181,7 +182,7 @@ def test_save_drop_and_refuse(
         )
     )
     assert window.session.deal == read_deal(FLATS)
-    type_into(qtbot, window, "property.name", "Mine")
+    type_into(window, "property.name", "Mine")
     assert window.isWindowModified()
     assert window.file.save(target)
     assert not window.isWindowModified()
@@ -194,11 +195,9 @@ def test_save_drop_and_refuse(
     assert window.session.deal.property.name == "Mine"
 
 
-def test_work_is_not_lost_without_asking(
-    qtbot: QtBot, window: Window, monkeypatch: pytest.MonkeyPatch
-) -> None:
+def test_work_is_not_lost_without_asking(window: Window, monkeypatch: pytest.MonkeyPatch) -> None:
     window.file.open(FLATS)
-    type_into(qtbot, window, "property.name", "Mine")
+    type_into(window, "property.name", "Mine")
     answers = [QMessageBox.StandardButton.Cancel, QMessageBox.StandardButton.Discard]
     monkeypatch.setattr(QMessageBox, "question", lambda *_: answers.pop(0))
     window.new_deal()

@@ -162,6 +162,16 @@ def test_f4_and_a_double_click_ask_for_the_working(desk: Desk) -> None:
     ]
 
 
+def test_a_double_click_on_an_input_opens_its_editor(desk: Desk) -> None:
+    where = desk.grid.visualRect(desk.grid.model().index(VACANCY, 2)).center()
+    QTest.mouseClick(desk.grid.viewport(), Qt.MouseButton.LeftButton, pos=where)
+    QTest.mouseDClick(desk.grid.viewport(), Qt.MouseButton.LeftButton, pos=where)
+    editor = desk.hand()
+    assert isinstance(editor, QLineEdit)
+    assert editor.text() == "7"
+    assert desk.asked == []
+
+
 def test_undo_and_redo_show_at_once(desk: Desk) -> None:
     start = desk.session.deal
     desk.at(VACANCY, 1).type("6").press(Qt.Key.Key_Return)
@@ -232,6 +242,16 @@ def test_amounts_follow_the_largest(qtbot: QtBot) -> None:
     desk.session.set("spaces@s1.market_rent.amount", 700.5, "rent")
     assert desk.texts(RENT) == ["8,406"] * 5
     assert desk.grid.corner.text() == "USD"
+
+
+def test_figures_are_put_anew_when_scale_or_locale_change(qtbot: QtBot) -> None:
+    costs = (Expense("x1", name="Costs", amount=3456.0),)
+    desk = Desk(qtbot, replace(base(), expenses=costs), [LineRow("expense@x1"), *ROWS])
+    assert desk.texts(0)[0] == "−3,456"
+    desk.session.set("conventions.locale", "de-DE", "locale")
+    assert desk.texts(0)[0] == "−3.456"
+    desk.session.set("spaces@s1.market_rent.amount", 1e6, "rent")
+    assert desk.texts(0)[0] == "−3"
 
 
 def test_german_marks(qtbot: QtBot) -> None:

@@ -6,8 +6,10 @@ from PySide6.QtCore import QModelIndex, QObject, Qt
 
 from workbench.session.session import Session
 from workbench.text.entry import Taken, parse_number
+from workbench.ui.grid.calendar import heading, heading_in_words
 from workbench.ui.grid.cell import Cell
 from workbench.ui.grid.cells import RIGHT, CellsModel, Entered, Index, Place, block_entries
+from workbench.ui.grid.digits import copied, edited
 from workbench.ui.grid.edits import YearEntry, step_name, with_entries
 from workbench.ui.grid.roles import COPIED, KIND, MARK, UNIT
 from workbench.ui.grid.rows import (
@@ -20,7 +22,7 @@ from workbench.ui.grid.rows import (
     unit_of_row,
 )
 from workbench.ui.grid.sheet import Sheet
-from workbench.ui.grid.spoken import heading_in_words, reason, spoken
+from workbench.ui.grid.spoken import reason, spoken
 
 Role = Qt.ItemDataRole
 NO_PARENT = QModelIndex()
@@ -51,7 +53,7 @@ class YearModel(CellsModel):
             case Role.DisplayRole:
                 return self.sheet.cell(row, year).text
             case Role.EditRole:
-                return self.sheet.edited(row, year)
+                return edited(self.sheet, row, year)
             case Role.ToolTipRole | Role.AccessibleDescriptionRole:
                 return reason(self.sheet, row, year)
             case Role.AccessibleTextRole:
@@ -69,7 +71,7 @@ class YearModel(CellsModel):
             return self.sheet.cell(row, year).kind
         if role == MARK:
             return self.sheet.cell(row, year).mark
-        return self.sheet.copied(row, year) if role == COPIED else None
+        return copied(self.sheet, row, year) if role == COPIED else None
 
     def headerData(
         self, section: int, orientation: Qt.Orientation, role: int = Role.DisplayRole
@@ -81,9 +83,9 @@ class YearModel(CellsModel):
     def _year_header(self, year: int, role: int) -> object:
         match role:
             case Role.DisplayRole:
-                return self.sheet.heading(year)
+                return heading(self.sheet.deal, year)
             case Role.ToolTipRole | Role.AccessibleTextRole:
-                return heading_in_words(self.sheet, year)
+                return heading_in_words(self.sheet.deal, year)
             case Role.TextAlignmentRole:
                 return RIGHT
             case _:
@@ -211,4 +213,4 @@ class YearModel(CellsModel):
 
     @staticmethod
     def _headings(sheet: Sheet) -> tuple[str, ...]:
-        return (*sheet.labels, *(sheet.heading(year + 1) for year in range(sheet.years)))
+        return (*sheet.labels, *(heading(sheet.deal, year + 1) for year in range(sheet.years)))

@@ -1,7 +1,6 @@
 """What a year grid shows: the text and the state of each cell, made when it is first asked for."""
 
 from collections.abc import Mapping, Sequence
-from datetime import MAXYEAR, date
 from functools import cached_property
 from math import isfinite
 
@@ -12,24 +11,14 @@ from workbench.deal.paths import UnknownPathError, get
 from workbench.engine.result import Result
 from workbench.session.typed import in_percent, locale_of
 from workbench.text import numbers
-from workbench.text.years import year_span
+from workbench.ui.grid.calendar import hold_of
 from workbench.ui.grid.cell import FOLLOWS, Cell, Kind, Mark
-from workbench.ui.grid.clipboard import plain
 from workbench.ui.grid.rows import GridRow, InputRow, LineRow, label_of_row
 
-USUAL_YEARS = 10
-"""Columns where the hold is not known."""
-LONGEST_HOLD = 40
 MOST_TEXTS = 20_000
 """Texts kept from sheet to sheet."""
 _LONGEST = 9
 """Characters of an amount in a column; above it the grid counts in thousands."""
-
-
-def hold_of(deal: Deal) -> int:
-    """How many years the grid shows."""
-    hold = deal.leave.hold
-    return USUAL_YEARS if hold is None else min(max(hold, 1), LONGEST_HOLD)
 
 
 class Sheet:
@@ -86,22 +75,6 @@ class Sheet:
             if issue.code != "draft":
                 found.setdefault(issue.path, issue)
         return found
-
-    def heading(self, year: int) -> str:
-        """The number of a year and, where closing is dated, the calendar year or years it is."""
-        span = self.span(year)
-        if span is None:
-            return str(year)
-        first, last = span
-        same = first.year == last.year
-        return f"{year}\n{first.year}" + ("" if same else f"/{last.year % 100:02d}")
-
-    def span(self, year: int) -> tuple[date, date] | None:
-        """The first and the last day of a year, where closing is dated."""
-        closing = self.deal.purchase.closing_date
-        if closing is None or closing.year + year >= MAXYEAR:
-            return None
-        return year_span(closing, year)
 
     def cell(self, row: int, year: int) -> Cell:
         """A cell, made once."""
@@ -214,22 +187,3 @@ class Sheet:
     def exists(self, row: InputRow) -> bool:
         """Whether the deal has this year row."""
         return row.path in self._typed
-
-    def edited(self, row: int, year: int) -> str:
-        """What an editor starts with: the draft, or the value with every digit."""
-        shown = self.rows[row]
-        if not isinstance(shown, InputRow):
-            return ""
-        draft = self.deal.drafts.get(f"{shown.path}.{year}")
-        if draft is not None:
-            return draft
-        return plain(self.value(shown, year), self.locale, self.percent(shown)).rstrip("%")
-
-    def copied(self, row: int, year: int) -> str:
-        """A cell for the clipboard: every digit, no grouping; a draft as typed."""
-        shown = self.rows[row]
-        if isinstance(shown, InputRow):
-            draft = self.deal.drafts.get(f"{shown.path}.{year}")
-            if draft is not None:
-                return draft
-        return plain(self.value(shown, year), self.locale, self.percent(shown))

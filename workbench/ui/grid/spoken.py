@@ -4,7 +4,6 @@ from collections.abc import Mapping
 
 from workbench.text.entry import NotTaken, parse_number
 from workbench.text.messages import word_issue, word_reason
-from workbench.text.numbers import day
 from workbench.ui.grid.cell import FOLLOWS
 from workbench.ui.grid.rows import InputRow, LineRow
 from workbench.ui.grid.sheet import Sheet
@@ -53,12 +52,3 @@ def _input_reason(sheet: Sheet, row: InputRow, path: str) -> str:
         return f"“{draft}” is not taken in.{why}"
     issue = sheet.issues.get(path)
     return "" if issue is None else f"{word_issue(sheet.result.plan.deal, issue)}."
-
-
-def heading_in_words(sheet: Sheet, year: int) -> str:
-    """A year with its first and last day."""
-    span = sheet.span(year)
-    if span is None:
-        return f"Year {year}"
-    first, last = (day(one, sheet.locale) for one in span)
-    return f"Year {year}: {first} to {last}"

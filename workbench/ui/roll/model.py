@@ -10,7 +10,7 @@ from workbench.ui.grid.cell import Cell
 from workbench.ui.grid.cells import LEFT, RIGHT, CellsModel, Entered, Index, Place, block_entries
 from workbench.ui.grid.roles import CHOICES, COPIED, KIND, MARK
 from workbench.ui.roll.columns import COLUMNS, columns_named
-from workbench.ui.roll.edits import with_texts
+from workbench.ui.roll.entries import with_texts
 from workbench.ui.roll.rows import Key, RollRow, name_of_row
 from workbench.ui.roll.sheet import RollSheet
 from workbench.ui.roll.values import choices

@@ -17,6 +17,7 @@ from workbench.ui.roll.model import RollModel
 from workbench.ui.roll.rows import RollRow, name_of_row
 
 NUMBERS_WIDTH = 40
+WIDEST = 320
 
 
 class RollGrid(Table):
@@ -27,8 +28,7 @@ class RollGrid(Table):
         super().__init__(self._roll, "Rent roll", parent)
         self._roll.setParent(self)
         self.labels.setFixedWidth(NUMBERS_WIDTH)
-        for place, column in enumerate(COLUMNS):
-            self.setColumnWidth(place, column.width)
+        self._fit()
         self.frozen = FrozenColumn(self, self._roll)
         session.deal_changed.connect(self._on_deal_changed)
         session.result_changed.connect(self._on_result_changed)
@@ -190,7 +190,16 @@ class RollGrid(Table):
 
     def resizeEvent(self, event: QResizeEvent) -> None:
         super().resizeEvent(event)
+        self._fit()
         self.frozen.place()
+
+    def _fit(self) -> None:
+        """Give the names and words what room is left over."""
+        words = [column for column in COLUMNS if column.content == "text"]
+        over = max(0, self.viewport().width() - sum(column.width for column in COLUMNS))
+        for place, column in enumerate(COLUMNS):
+            share = over // len(words) if column in words else 0
+            self.setColumnWidth(place, min(column.width + share, WIDEST))
 
     def _on_deal_changed(self, revision: object) -> None:
         self._roll.follow()
