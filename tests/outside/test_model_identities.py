@@ -19,9 +19,10 @@ from hypothesis import strategies as st
 from tests.engine.deals import changed, deal, evaluated, space, with_loan
 from tests.oracle.test_random_deals import drawn
 from workbench.deal.deal import Deal
+from workbench.deal.earn import Stated
 from workbench.deal.inputs import at_year
-from workbench.deal.leave import ExitMethod, Leave
-from workbench.deal.property import Timing
+from workbench.deal.leave import ExitMethod, Leave, Returns
+from workbench.deal.property import Conventions, Timing
 from workbench.deal.purchase import Purchase
 from workbench.deal.spend import Expense, Spend
 from workbench.engine.cash import mirr, npv
@@ -138,7 +139,7 @@ def lasting(base: Deal, timing: Timing) -> Deal:
 @pytest.mark.parametrize("timing", TIMINGS)
 def test_the_reference_line_is_flat(timing: Timing) -> None:
     flat = 0
-    for base in random_deals(9300, 20):
+    for base in random_deals(9300, 14):
         plan = compile_deal(lasting(base, timing))
         swept = evaluate(plan, {"leave.hold": np.arange(1.0, 41.0)[:, np.newaxis]})
         reference = swept.figure("reference_value")
@@ -152,7 +153,7 @@ def test_the_reference_line_is_flat(timing: Timing) -> None:
         if reference > 0:
             shares = swept.line("exit_value_share")[:, 0]
             assert shares == pytest.approx(swept.line("reference_share")[:, 0], rel=1e-9, abs=1e-9)
-    assert flat >= 6
+    assert flat >= 4
 
 
 def test_selling_cost_is_what_bends_it() -> None:
@@ -338,7 +339,9 @@ def separable(base: Deal, method: ExitMethod) -> Deal:
         loans=(),
         expenses=(Expense("x1", amount=0.3, basis="egi"),),
         spend=Spend(reserves=0.03, reserves_basis="egi"),
-        stated=replace(base.stated, **dict.fromkeys(vars(base.stated))),
+        stated=Stated(),
+        conventions=Conventions(),
+        returns=Returns(required=base.returns.required),
         purchase=Purchase(price=1.0, closing_date=base.purchase.closing_date),
         leave=Leave(
             hold=base.leave.hold,

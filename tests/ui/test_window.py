@@ -5,7 +5,7 @@ from pathlib import Path
 
 import pytest
 from PySide6.QtCore import QMimeData, QPointF, QSettings, Qt, QUrl
-from PySide6.QtGui import QDropEvent
+from PySide6.QtGui import QDropEvent, QGuiApplication
 from PySide6.QtTest import QTest
 from PySide6.QtWidgets import QLineEdit, QMessageBox, QWidget
 from pytestqt.qtbot import QtBot
@@ -152,6 +152,29 @@ def test_the_working_opens_leads_on_and_jumps_to_the_input(window: Window) -> No
     assert window.desk.currentIndex() == 1
     window.working._close.click()
     assert not window.working.isVisible()
+
+
+def test_a_roll_pasted_into_a_new_deal_stays_in_sight(window: Window) -> None:
+    window.show_page(1)
+    earn = window.desk.pages[1]
+    assert isinstance(earn, Page)
+    earn.show_view(1)
+    roll = window.desk._roll
+    QGuiApplication.clipboard().setText("\n".join(f"Flat {n}\tflat\t1\t60\t900" for n in range(40)))
+    roll.choose((0, 0), (0, 0))
+    roll.paste()
+    window.session.catch_up()
+    assert len(window.session.deal.spaces) == 40
+    assert window.session.undo_label is not None
+    now = window.desk.pages[1]
+    assert isinstance(now, Page) and now is not earn
+    assert now.view == 1 and roll.isVisible()
+    window.jump(f"spaces@{window.session.deal.spaces[7].id}.count")
+    assert window.desk.currentIndex() == 1
+    window.session.undo()
+    window.session.catch_up()
+    assert len(window.session.deal.spaces) == 1
+    assert roll.isVisible()
 
 
 def test_every_page_opens_for_every_sample(window: Window) -> None:

@@ -21,6 +21,9 @@ class Desk(QStackedWidget):
         super().__init__(parent)
         self._session = session
         self._contents: tuple[Contents, ...] = ()
+        self._roll = RollGrid(session, self)
+        """Outlives the page it stands on, so that typing in it goes on when the page is remade."""
+        self._roll.refused.connect(self.refused)
         self.names = tuple(one.name for one in pages(session.deal))
         self.pages: list[QWidget] = []
         self.areas: list[QScrollArea] = []
@@ -36,7 +39,7 @@ class Desk(QStackedWidget):
             return HandOnPage(self._session, self)
         others: list[tuple[str, QWidget]] = []
         if contents.name == "Earn":
-            others.append(("Rent roll", RollGrid(self._session)))
+            others.append(("Rent roll", self._roll))
         page = Page(self._session, contents, others, self)
         page.asked.connect(self.asked)
         page.refused.connect(self.refused)
@@ -52,8 +55,12 @@ class Desk(QStackedWidget):
 
     def _replace(self, place: int, contents: Contents) -> None:
         shown = self.currentIndex()
-        old = self.areas[place]
-        self.pages[place] = self._make(contents)
+        old, page = self.areas[place], self.pages[place]
+        view = page.view if isinstance(page, Page) else 0
+        made = self._make(contents)
+        self.pages[place] = made
+        if isinstance(made, Page):
+            made.show_view(view)
         self.areas[place] = _scrolled(self.pages[place], self)
         self.insertWidget(place, self.areas[place])
         self.removeWidget(old)
@@ -76,6 +83,8 @@ class Desk(QStackedWidget):
 
     def go_to_cell(self, path: str) -> int | None:
         """The page whose grid shows an input by year, with the cell in sight; None if none does."""
+        if self._roll.go_to(path):
+            return self._show_roll()
         row, _, year = path.rpartition(".")
         row, at = (row, int(year)) if year.isdigit() else (path, 1)
         for place, page in enumerate(self.pages):
@@ -83,6 +92,13 @@ class Desk(QStackedWidget):
                 page.show_view(0)
                 return place
         return None
+
+    def _show_roll(self) -> int:
+        for place, page in enumerate(self.pages):
+            if isinstance(page, Page) and page.isAncestorOf(self._roll):
+                page.show_view(1)
+                return place
+        return 0
 
 
 def _scrolled(page: QWidget, parent: QWidget) -> QScrollArea:

@@ -42,6 +42,7 @@ class Page(QWidget):
         self.form: Form | None = None
         self.lists: list[ItemRows] = []
         self.grid: YearGrid | None = None
+        self.view = 0
         column.addWidget(self._main_view(), 1)
         for _, view in self._others:
             view.setParent(self)
@@ -113,6 +114,7 @@ class Page(QWidget):
 
     def show_view(self, place: int) -> None:
         """Show one of the page's views."""
+        self.view = place
         for number, view in enumerate(self._views):
             view.setVisible(number == place)
         button = self._switches.button(place)
