@@ -178,6 +178,7 @@ def _bracketed(tokens: tuple[Token, ...], strength: int) -> tuple[Token, ...]:
 
 
 def _gathered(values: list[float], how: How) -> float:
+    """Many cells as one; *first* gives the years to the first cell that is not negative."""
     array = np.array(values)
     match how:
         case "sum":
@@ -186,10 +187,8 @@ def _gathered(values: list[float], how: How) -> float:
             return float(array.prod())
         case "least":
             return float(array.min(initial=np.inf))
-        case "first":
-            reached = np.flatnonzero(array >= 0)
-            return float(reached[0]) / 12 if len(reached) else float("nan")
-    return float(array[0])
+    reached = np.flatnonzero(array >= 0)
+    return float(reached[0]) / 12 if len(reached) else float("nan")
 
 
 def _named(node: f.Line | f.Given | f.Fact) -> tuple[Kind, str]:
@@ -198,5 +197,4 @@ def _named(node: f.Line | f.Given | f.Fact) -> tuple[Kind, str]:
             return "line", key
         case f.Given(path=path):
             return "input", path
-        case f.Fact(name=name):
-            return "fact", name
+    return "fact", node.name

@@ -16,6 +16,10 @@ from workbench.text.labels import label_of
 from workbench.text.messages import word_issue
 
 
+NEEDED = frozenset({"missing", "method_needs"})
+"""Codes of issues that say no more than that something has still to be typed."""
+
+
 class TextField(QLineEdit):
     """A number, a date or a text. Each keystroke that can be taken in is; the rest waits.
 
@@ -78,12 +82,15 @@ class TextField(QLineEdit):
         """Mark the field and say why, where something is wrong with it."""
         deal = self._session.deal
         issues = self._session.issues_at(self.path)
+        wanted = bool(issues) and all(issue.code in NEEDED for issue in issues)
+        self.setPlaceholderText("needed" if wanted else "")
         fault = "; ".join(word_issue(deal, issue) for issue in issues)
         if self.path in deal.drafts:
             read = read_typed(deal, self.path, deal.drafts[self.path])
             fault = read.reason if isinstance(read, NotTaken) else fault
-        if bool(self.property("fault")) != bool(fault):
-            self.setProperty("fault", bool(fault))
+        marked = bool(fault) and not wanted
+        if bool(self.property("fault")) != marked:
+            self.setProperty("fault", marked)
             self.style().unpolish(self)
             self.style().polish(self)
         self.setToolTip(fault or self._help)

@@ -71,7 +71,7 @@ class Form(QWidget):
         for place, path in enumerate(paths):
             row, column = divmod(place, across)
             _, mark = declaration(self._session.deal, path)
-            label = QLabel(mark.label, self)
+            label = QLabel(_form_label(path, mark.label), self)
             label.setAlignment(Qt.AlignmentFlag.AlignRight | Qt.AlignmentFlag.AlignVCenter)
             field = make_field(self._session, path, self)
             label.setBuddy(field)
@@ -111,6 +111,21 @@ class Form(QWidget):
                     self._fold.click()
                 return field
         return None
+
+
+_LABELS = {
+    "market_rent.amount": "Market rent",
+    "market_rent.per": "Market rent per",
+    "market_rent.of": "Market rent of each",
+}
+
+
+def _form_label(path: str, label: str) -> str:
+    """A label that says what it belongs to where no item's name stands beside it."""
+    head, _, field = path.partition(".")
+    if head.startswith("expenses@"):
+        return "Expenses a year"
+    return _LABELS.get(field, label)
 
 
 class ItemRows(QWidget):

@@ -8,6 +8,7 @@ from workbench.engine.result import Result
 from workbench.session.session import Session
 from workbench.session.typed import locale_of
 from workbench.text.numbers import MISSING, compact, multiple, percent
+from workbench.ui.fields import NEEDED
 
 FIGURES = (
     ("price", "Price", False),
@@ -123,7 +124,8 @@ class Strip(QWidget):
 
     def _tell_faults(self, result: Result) -> None:
         count = len(result.plan.issues)
-        text = f"{count} to mend" if count else ""
+        untyped = all(issue.code in NEEDED for issue in result.plan.issues)
+        text = f"{count} {'still needed' if untyped else 'to mend'}" if count else ""
         self._faults.setText(text)
         self._faults.setVisible(bool(count))
         self._faults.setAccessibleName(text or "nothing to mend")

@@ -93,6 +93,7 @@ RULES = (
         f"font-size: {TYPE_FIGURE}px; font-weight: 700",
     ),
     Rule('QLabel[role="fault"]', "price", _PLAIN),
+    Rule('QFrame[role="rule"]', "muted", _PLAIN),
     Rule('QLineEdit[fault="true"]', "price", ("paper",), "border: 2px solid {price}"),
     Rule(
         'QWidget[role="strip"]',
