@@ -23,11 +23,11 @@ def assert_agrees(base: Deal) -> None:
     for key, line in result.declared.items():
         if isinstance(line.body, Output):
             continue
-        made, refused = values.of(line.body), False
+        made, refused = values.of(line.body), np.array([False])
         for position, (condition, _) in enumerate(line.unless):
             met = values.of(condition)
             assert np.array_equal(met, result.values[condition_key(key, position)]), key
-            refused = refused | met
+            refused = np.logical_or(refused, met)
         expected = np.where(refused, np.nan, made) + 0.0 * result.values[key]
         assert np.array_equal(expected, result.values[key], equal_nan=True), key
 

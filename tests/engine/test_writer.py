@@ -81,7 +81,7 @@ def test_which_cell_an_operand_is() -> None:
     writer.cell(f.of_year(Line("rent_index")), 30)
     writer.cell(f.month_starts(Line("noi")), 0)
     places = [(one.key, one.span, one.at) for one in writer.operands]
-    # From 0 the third year is followed by the fourth: from 1 the fifth. Month 30 lies in year 3.
+    # Cells count from 0, places from 1: cell 3 is year 4, cell 30 lies in year 3.
     assert places == [("noi_of_year", "year", 5), ("rent_index", "year", 3), ("noi", "month", 1)]
 
 

@@ -4,11 +4,18 @@ from PySide6.QtCore import Qt, Signal
 from PySide6.QtWidgets import QFrame, QScrollArea, QStackedWidget, QWidget
 
 from workbench.session.session import Session
+from workbench.ui.chart_view import INCOME, LOAN, TIERS, ChartView
 from workbench.ui.contents import Contents, pages
 from workbench.ui.fields import AnyField
 from workbench.ui.hand_on import HandOnPage
 from workbench.ui.page import Page
 from workbench.ui.roll import RollGrid
+
+CHARTS = {
+    "Borrow": (("Income and debt service", INCOME), ("Loan under price", LOAN)),
+    "Leave": (("Tiers by year", TIERS),),
+}
+"""Pictures that are views of a page."""
 
 
 class Desk(QStackedWidget):
@@ -40,6 +47,10 @@ class Desk(QStackedWidget):
         others: list[tuple[str, QWidget]] = []
         if contents.name == "Earn":
             others.append(("Rent roll", self._roll))
+        for title, chart in CHARTS.get(contents.name, ()):
+            view = ChartView(self._session, chart)
+            view.asked.connect(self.asked)
+            others.append((title, view))
         page = Page(self._session, contents, others, self)
         page.asked.connect(self.asked)
         page.refused.connect(self.refused)

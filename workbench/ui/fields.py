@@ -15,7 +15,6 @@ from workbench.text.entry import NotTaken, Taken
 from workbench.text.labels import label_of
 from workbench.text.messages import word_issue
 
-
 NEEDED = frozenset({"missing", "method_needs"})
 """Codes of issues that say no more than that something has still to be typed."""
 

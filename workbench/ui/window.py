@@ -28,7 +28,6 @@ from workbench.ui.theme import apply_theme
 from workbench.ui.wall_view import WallView
 from workbench.ui.working_panel import WorkingPanel
 
-WALL_WIDTH = 262
 FILTER = "Deals (*.deal);;All files (*)"
 RECENT = 8
 
@@ -47,7 +46,6 @@ class Window(QMainWindow):
         self.desk = Desk(session, self)
         self.rail = Rail(self.desk.names, self)
         self.wall = WallView(session, self)
-        self.wall.setFixedWidth(WALL_WIDTH)
         self.working = WorkingPanel(session, self)
         self.working.hide()
         self.setCentralWidget(self._body())
