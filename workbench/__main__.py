@@ -37,7 +37,7 @@ def main(words: Sequence[str] | None = None) -> int:
     _prepare_streams()
     given = list(sys.argv[1:] if words is None else words)
     if not given or (len(given) == 1 and given[0] not in COMMANDS and given[0][0:1] != "-"):
-        return open_window(Path(given[0]) if given else None)
+        return open_window(*map(Path, given))
     arguments = parser().parse_args(given)
     module = importlib.import_module(f"workbench.commands.{arguments.command}")
     from workbench.commands.terms import say_fault
@@ -60,8 +60,12 @@ def main(words: Sequence[str] | None = None) -> int:
         return say_fault(error.filename or "standard output", error)
 
 
-def open_window(path: Path | None) -> int:
+def open_window(path: Path | None = None) -> int:
     """Open the window, on a deal if one is named; Qt is loaded only here."""
+    if path is not None and not path.is_file():
+        known = ", ".join(COMMANDS)
+        print(f"{path}: there is no such deal file, and no such command ({known})", file=sys.stderr)
+        return 2
     display = os.environ.get("DISPLAY") or os.environ.get("WAYLAND_DISPLAY")
     own = sys.platform in ("win32", "darwin") or os.environ.get("QT_QPA_PLATFORM")
     if not (display or own):

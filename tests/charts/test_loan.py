@@ -60,6 +60,13 @@ def test_the_words_in_one_line() -> None:
     assert free.words == "Loans of 600 at closing; 500 is owed at the end of year 1."
 
 
+def test_the_words_say_when_all_is_repaid() -> None:
+    picture = drawn((600.0, 500.0, 0.0, 0.0), 1000.0, (None, 9.0, 9.0, 9.0))
+    assert picture.words == (
+        "Loans of 600 at closing are 60.0% of the price; nothing is owed after year 2."
+    )
+
+
 def test_zero_loans() -> None:
     picture = drawn((0.0, 0.0), 10.0, (None, 11.0))
     assert picture.words == "No loan is owed."

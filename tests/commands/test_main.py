@@ -16,6 +16,9 @@ from tests.fullest import FULLEST, fullest_raw, small_raw
 from workbench import __main__ as program
 from workbench import __version__
 from workbench.__main__ import COMMANDS, main
+from workbench.places import sample_deals
+
+FLATS = sample_deals() / "quillon-court-flats.deal"
 
 NESTED = '{"a":' * 200 + "1" + "}" * 200
 PYTHON = [sys.executable, "-m", "workbench"]
@@ -152,8 +155,8 @@ def test_a_file_name_can_neither_break_nor_steer_a_line(
 @pytest.mark.parametrize(
     ("words", "said"),
     [
-        ([], "the following arguments are required: COMMAND"),
-        (["value"], "invalid choice: 'value'"),
+        (["value"], "value: there is no such deal file, and no such command (figures, "),
+        (["value", "my.deal"], "invalid choice: 'value'"),
         (["figures"], "the following arguments are required: deal"),
         (["document", "my.deal"], "the following arguments are required: OUT.pdf"),
         (["check", "my.deal", "other.deal"], "unrecognized arguments: other.deal"),
@@ -169,6 +172,18 @@ def test_a_line_that_is_not_understood(
     ran = run(capsys, *words)
     assert (ran.status, ran.out) == (2, "")
     assert said in ran.err
+
+
+@pytest.mark.parametrize("words", [[], [str(FLATS)]])
+def test_without_a_display_the_window_says_so(
+    capsys: pytest.CaptureFixture[str], monkeypatch: pytest.MonkeyPatch, words: list[str]
+) -> None:
+    for name in ("DISPLAY", "WAYLAND_DISPLAY", "QT_QPA_PLATFORM"):
+        monkeypatch.delenv(name, raising=False)
+    monkeypatch.setattr("sys.platform", "linux")
+    ran = run(capsys, *words)
+    assert (ran.status, ran.out) == (2, "")
+    assert "there is no display to open a window on" in ran.err
 
 
 @pytest.mark.parametrize("words", [["--help"], *([command, "--help"] for command in COMMANDS)])

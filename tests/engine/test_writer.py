@@ -8,7 +8,7 @@ from tests.engine.deals import changed, deal, evaluated, fullest, near
 from workbench.deal.spend import Expense
 from workbench.engine import formula as f
 from workbench.engine.formula import Fact, Formula, Line, Number
-from workbench.engine.operands import Operand, Ref, Token
+from workbench.engine.operands import Ref, Token
 from workbench.engine.working import working, working_at
 from workbench.engine.writer import Writer
 
@@ -85,6 +85,15 @@ def test_which_cell_an_operand_is() -> None:
     assert places == [("noi_of_year", "year", 5), ("rent_index", "year", 3), ("noi", "month", 1)]
 
 
+def test_which_cells_are_gathered() -> None:
+    writer = Writer(evaluated(deal()))
+    writer.cell(f.later_sum(Line("noi_of_year")), 38)
+    writer.cell(f.running_least(Line("noi_of_year")), 1)
+    later, so_far = writer.operands
+    assert [cell.at for cell in later.cells] == [40, 41]
+    assert [cell.at for cell in so_far.cells] == [1, 2]
+
+
 def test_an_operand_met_twice_has_one_number() -> None:
     writer = Writer(evaluated(deal()))
     first, second = writer.cell(Line("value"), 0), writer.cell(Line("value"), 0)
@@ -122,4 +131,6 @@ def test_balances_of_a_year_are_those_of_its_end() -> None:
         # Ten a month and no works in year 1.
         assert shown.value == near(120)
         assert shown.value == working_at(result, key, "month", 12).value
-        assert isinstance(shown.operands[0], Operand)
+    opening, paid = working(result, "reserve_path", 1).operands
+    assert opening.value == 0
+    assert [cell.at for cell in paid.cells] == list(range(1, 13)) and paid.value == near(120)

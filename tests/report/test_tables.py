@@ -70,6 +70,14 @@ def test_sums_that_follow_one_another_stand_together() -> None:
     assert kept == [place in (0, 1, 2, 3, 4, 7) for place in range(9)]
 
 
+def test_a_title_among_the_rows_stands_with_those_under_it() -> None:
+    rows = tuple((f"row {n}", "" if n == 4 else str(n)) for n in range(9))
+    table = Table(COLUMNS, rows, frozenset({4}))
+    slabs = table_slabs(table, 300)[1:]
+    kept = [slab.keep_next or slab.prefer_next for slab in slabs]
+    assert kept == [place in (0, 4, 7) for place in range(9)]
+
+
 def test_a_whole_table_is_kept_together() -> None:
     rows = tuple((f"row {n}", str(n)) for n in range(9))
     slabs = table_slabs(Table(COLUMNS, rows, whole=True), 300)

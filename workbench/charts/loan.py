@@ -120,8 +120,15 @@ def _words(figures: LoanFigures) -> str:
     said = f"Loans of {money(opening)} at closing"
     if figures.price is not None and figures.price > 0:
         said += f" are {figures.share(opening / figures.price)} of the price"
+    if not left:
+        return f"{said}; nothing is owed after year {_last_owed(owed) + 1}."
     said += f"; {money(left)} is owed at the end of year {last}"
     sale = dict(known(figures.sale)).get(last)
     if sale is not None and sale > 0:
         said += f", {figures.share(left / sale)} of the price of a sale then"
     return f"{said}."
+
+
+def _last_owed(owed: list[tuple[int, float]]) -> int:
+    """The last year at whose end anything is owed; 0 is closing."""
+    return max(year for year, amount in owed if amount)

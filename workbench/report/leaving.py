@@ -27,6 +27,7 @@ def exit_section(years: Years) -> Section:
         tuple((step.label, step.text) for step in steps),
         frozenset(number for number, step in enumerate(steps) if step.strong),
         notes=tuple(step.note for step in steps),
+        fine=True,
         whole=len(steps) <= _WHOLE,
     )
     if years.result.figure("exit_price") is not None:

@@ -9,7 +9,7 @@ from workbench.report.document import Block, Figure, Section, Subheading, plain
 from workbench.report.names import item_title
 from workbench.report.years import Amounts, Row, Years
 
-_CHART = (138.0, 7.6)
+_CHART = (126.0, 7.6)
 
 
 def loan_section(years: Years, column: float) -> tuple[Section, ...]:

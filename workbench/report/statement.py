@@ -19,7 +19,7 @@ _SUMS = frozenset(
     }
 )
 _INDENT = 2 * NO_BREAK
-_CHART = (138.0, 7.6)
+_CHART = (126.0, 7.6)
 """Height of the picture and size of its letters."""
 
 

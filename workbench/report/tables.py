@@ -2,7 +2,7 @@
 
 import sys
 from dataclasses import dataclass, replace
-from itertools import count
+from itertools import count, takewhile
 
 from workbench.charts.lettering import CAP_HEIGHT, LEADING, Weight, printable
 from workbench.charts.shapes import Anchor, Line, Role, Shape, Text
@@ -66,13 +66,20 @@ def table_slabs(table: Table, room: float) -> tuple[Slab, ...]:
 def _is_kept(table: Table, number: int) -> bool:
     """Whether a row stands on the page of the next one.
 
-    No first or last row is alone on a page, and what stands just above a sum goes with it.
+    No first or last row is alone on a page, what stands just above a sum goes with it, and so does
+    what stands under a title.
     """
     last = len(table.rows) - 1
-    if number == last or table.whole or number in (0, last - 1):
+    if number == last or table.whole or number in (0, last - 1) or _is_title(table, number):
         return number < last
     near = range(number + 1, number + (2 if number in table.strong else _WITH_SUM + 1))
-    return not table.strong.isdisjoint(near)
+    until_title = takewhile(lambda row: not _is_title(table, row), near)
+    return not table.strong.isdisjoint(until_title)
+
+
+def _is_title(table: Table, number: int) -> bool:
+    """Whether a row does no more than name those under it."""
+    return number in table.strong and not any(table.rows[number][1:])
 
 
 def _header(setting: _Setting) -> tuple[Slab, ...]:

@@ -6,7 +6,7 @@ from workbench.report.document import Block, Figure, Section, Subheading, plain
 from workbench.report.readings import Readings
 from workbench.report.years import Row, Years
 
-_CHART = (138.0, 7.6)
+_CHART = (126.0, 7.6)
 
 
 def tier_section(years: Years, read: Readings, column: float) -> tuple[Section, ...]:
