@@ -90,6 +90,10 @@ def test_income_is_tied_to_a_dated_lease(lease: str) -> None:
     assert found == [Issue("other_income@i14.lease", "no_such_lease", lease)]
 
 
+def test_income_may_be_tied_to_any_lease_of_a_space() -> None:
+    assert issues(set_value(fullest(), "other_income@i14.lease", "e5")) == []
+
+
 def test_a_lease_with_one_date_ties_nothing() -> None:
     found = issues(set_value(fullest(), "leases@e2.end", None))
     assert Issue("other_income@i14.lease", "no_such_lease", "e2") in found

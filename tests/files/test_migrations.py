@@ -44,6 +44,18 @@ def test_each_step_is_taken_in_turn(raw: Raw, newest: int, expected: Raw) -> Non
     assert raw == before
 
 
+def test_a_step_may_change_what_it_is_given() -> None:
+    """It is given a copy."""
+
+    def move(raw: Raw) -> Raw:
+        raw["price"] = raw.pop("ask")
+        return raw
+
+    raw = {"schema": 1, "ask": 5}
+    assert migrate(raw, {1: move}, 2) == {"schema": 2, "price": 5}
+    assert raw == {"schema": 1, "ask": 5}
+
+
 def test_the_newest_version_passes_as_it_is() -> None:
     raw = {"schema": SCHEMA, "leave": {}}
     assert migrate(raw) is raw
